@@ -1,0 +1,47 @@
+/** The fixed vocabularies of the cellar. Pure, so that forms, actions and tables share them. */
+export const ROLES = ['owner', 'winemaker', 'leader', 'cellar_hand', 'panelist'] as const;
+export type Role = (typeof ROLES)[number];
+
+export const DRINKS = ['wine', 'cider', 'perry', 'mead'] as const;
+export type Drink = (typeof DRINKS)[number];
+
+export const VESSEL_KINDS = ['barrel', 'puncheon', 'demijohn', 'foudre', 'tank', 'keg', 'amphora'] as const;
+export type VesselKind = (typeof VESSEL_KINDS)[number];
+
+export const TOASTS = ['light', 'medium', 'medium_plus', 'heavy', 'none'] as const;
+export type Toast = (typeof TOASTS)[number];
+
+export const GRAINS = ['very_fine', 'fine', 'medium', 'loose'] as const;
+export type Grain = (typeof GRAINS)[number];
+
+export const DRAW_METHODS = ['thief', 'nail', 'spigot'] as const;
+export type DrawMethod = (typeof DRAW_METHODS)[number];
+
+export const METHODS = ['profile', 'triangle'] as const;
+export type Method = (typeof METHODS)[number];
+
+export const SESSION_STATES = ['draft', 'sealed', 'open', 'closed', 'unsealed', 'abandoned'] as const;
+export type SessionState = (typeof SESSION_STATES)[number];
+
+export const PHASES = ['look', 'nose', 'palate', 'mouthfeel', 'after'] as const;
+export type Phase = (typeof PHASES)[number];
+
+export const SENSES = ['aroma', 'fault', 'mouthfeel', 'appearance', 'taste'] as const;
+export type Sense = (typeof SENSES)[number];
+
+export const ALLERGENS = ['sulfites', 'egg', 'milk', 'nuts', 'honey', 'gluten'] as const;
+export type Allergen = (typeof ALLERGENS)[number];
+
+export const SEAT_ROLES = ['taste', 'nose_only'] as const;
+export type SeatRole = (typeof SEAT_ROLES)[number];
+
+export const CALLS = ['bottle', 'hold', 'rack', 'top', 'treat', 'blend', 'declassify'] as const;
+export type CallKind = (typeof CALLS)[number];
+
+/** What one operation sent by a phone may record. */
+export const OPERATION_KINDS = ['score', 'clear', 'choice', 'comment', 'fault', 'submit'] as const;
+export type OperationKind = (typeof OPERATION_KINDS)[number];
+
+/** `counted` before close; `late` after it: kept and shown, never counted. */
+export const ADMISSIONS = ['counted', 'late'] as const;
+export type Admission = (typeof ADMISSIONS)[number];

@@ -1,0 +1,79 @@
+import Database from 'better-sqlite3';
+import { drizzle } from 'drizzle-orm/better-sqlite3';
+import { migrate } from 'drizzle-orm/better-sqlite3/migrator';
+import { existsSync, mkdirSync, readFileSync } from 'node:fs';
+import path from 'node:path';
+
+/** Without these the promises about evidence are empty, so their presence is checked each time. */
+export const REQUIRED_TRIGGERS = [
+  'audit_events_no_delete', 'audit_events_no_update', 'ballot_items_fixed_by_sealing',
+  'operations_counted_only_while_open', 'operations_no_delete', 'operations_no_update',
+  'samples_fixed_by_sealing', 'seals_no_delete', 'seals_no_update', 'serving_samples_no_delete',
+  'serving_samples_no_update', 'serving_samples_only_after_unsealing', 'servings_no_delete',
+  'servings_no_update', 'servings_only_while_sealing', 'sessions_states_in_order',
+] as const;
+
+export const migrationsFolder = () => path.join(/* turbopackIgnore: true */ process.cwd(), 'db', 'migrations');
+
+function rowCounts(sqlite: Database.Database): Map<string, number> {
+  const names = sqlite
+    .prepare("SELECT name FROM sqlite_schema WHERE type = 'table' AND name NOT LIKE 'sqlite_%' AND name NOT LIKE '\\_\\_%' ESCAPE '\\'")
+    .pluck()
+    .all() as string[];
+  return new Map(names.map((name) => [name, sqlite.prepare(`SELECT count(*) FROM "${name}"`).pluck().get() as number]));
+}
+
+function pendingMigrations(sqlite: Database.Database, folder: string): number {
+  const journal = JSON.parse(readFileSync(path.join(folder, 'meta', '_journal.json'), 'utf8')) as { entries: unknown[] };
+  const hasLog = sqlite.prepare("SELECT 1 FROM sqlite_schema WHERE name = '__drizzle_migrations'").get();
+  const done = hasLog ? (sqlite.prepare('SELECT count(*) FROM __drizzle_migrations').pluck().get() as number) : 0;
+  return journal.entries.length - done;
+}
+
+/**
+ * Brings the file to the newest schema on a connection of its own with foreign keys off: a rebuilt
+ * parent table would otherwise wipe its children inside the migrator's transaction, where turning
+ * the keys off has no effect. A copy is made first; rows lost, broken references or missing
+ * triggers afterwards are an error.
+ * @param allowedLosses tables that a migration is meant to empty or drop
+ * @returns how many migrations ran
+ * @throws Error that names the copy to go back to
+ */
+export function migrateDatabase(file: string, folder = migrationsFolder(), allowedLosses: readonly string[] = []): number {
+  const isNew = !existsSync(file);
+  mkdirSync(path.dirname(file), { recursive: true });
+  const sqlite = new Database(file);
+  try {
+    sqlite.pragma('journal_mode = WAL');
+    sqlite.pragma('synchronous = FULL');
+    const pending = pendingMigrations(sqlite, folder);
+    if (pending === 0) {
+      requireTriggers(sqlite);
+      return 0;
+    }
+    const copy = `${file}.before-${new Date().toISOString().replaceAll(/[:.]/g, '-')}`;
+    const before = rowCounts(sqlite);
+    if (!isNew && before.size > 0) sqlite.prepare('VACUUM INTO ?').run(copy);
+    sqlite.pragma('foreign_keys = OFF');
+    migrate(drizzle(sqlite), { migrationsFolder: folder });
+    const hint = isNew ? '' : ` The state before it was kept as ${copy}`;
+    const after = rowCounts(sqlite);
+    for (const [table, count] of before) {
+      if (!allowedLosses.includes(table) && (after.get(table) ?? 0) < count) {
+        throw new Error(`A migration lost rows of ${table}: ${count} before, ${after.get(table) ?? 0} after.${hint}`);
+      }
+    }
+    const broken = sqlite.pragma('foreign_key_check') as unknown[];
+    if (broken.length > 0) throw new Error(`A migration broke ${broken.length} references.${hint}`);
+    requireTriggers(sqlite);
+    return pending;
+  } finally {
+    sqlite.close();
+  }
+}
+
+function requireTriggers(sqlite: Database.Database): void {
+  const found = new Set(sqlite.prepare("SELECT name FROM sqlite_schema WHERE type = 'trigger'").pluck().all() as string[]);
+  const missing = REQUIRED_TRIGGERS.filter((name) => !found.has(name));
+  if (missing.length > 0) throw new Error(`The database lacks the triggers that protect evidence: ${missing.join(', ')}`);
+}
