@@ -1,0 +1,2 @@
+export * from './midranks';
+export * from './concordance';
