@@ -1,49 +1,13 @@
-import erfc from '@stdlib/math-base-special-erfc';
 import { requireInteger } from '../check';
 import { StatsError } from '../errors';
 import { requireClosedProbability, requireDf, requireNumber } from './arguments';
 import { logGamma } from './gamma';
 import { normalQuantile } from './normal';
+import { normalRangeTail } from './normal-range';
 import { tQuantile, tTwoSided } from './t';
 
 /** Largest number of means the quadrature is made for. */
 const MAX_MEANS = 200;
-const LOW = -8.75;
-const STEP = 0.25;
-const INV_SQRT_2PI = 0.3989422804014327;
-
-/** Φ and φ·step at the fixed grid LOW + j·STEP; the trapezoidal rule on it converges exponentially. */
-const GRID = 240;
-const phi = new Float64Array(GRID);
-const cdf = new Float64Array(GRID);
-for (let j = 0; j < GRID; j += 1) {
-  const z = LOW + j * STEP;
-  phi[j] = STEP * INV_SQRT_2PI * Math.exp(-0.5 * z * z);
-  cdf[j] = 0.5 * erfc(-z * Math.SQRT1_2);
-}
-
-/**
- * P(range of k standard normals > w), or ≤ w with `upper` false. From the largest value z:
- * k ∫ φ(z) [Φ(z) − Φ(z − w)]^(k−1) dz, whose complement is k ∫ φ(z) {Φ(z)^(k−1) − [Φ(z) − Φ(z − w)]^(k−1)} dz.
- */
-function rangeTail(w: number, k: number, upper: boolean): number {
-  if (w <= 0) return upper ? 1 : 0;
-  // Past z = 10 the density is below 1e-22; far tails peak near w/2.
-  const last = Math.min(GRID - 1, Math.ceil((Math.max(9, w / 2 + 6) - LOW) / STEP));
-  const m = k - 1;
-  let sum = 0;
-  for (let j = 0; j <= last; j += 1) {
-    const whole = cdf[j];
-    const below = 0.5 * erfc((w - (LOW + j * STEP)) * Math.SQRT1_2);
-    if (upper) {
-      const ratio = below / whole;
-      if (ratio <= 0) continue;
-      sum += ratio < 1 ? -phi[j] * Math.pow(whole, m) * Math.expm1(m * Math.log1p(-ratio)) : phi[j] * Math.pow(whole, m);
-    } else if (whole > below) sum += phi[j] * Math.pow(whole - below, m);
-  }
-  return Math.min(1, k * sum);
-}
-
 interface Scale {
   /** Values of s = √(χ²_df / df). */
   readonly at: Float64Array;
@@ -56,7 +20,7 @@ const KEEP = 64;
 
 /**
  * A trapezoidal rule for the scale s with density 2 (df/2)^(df/2) / Γ(df/2) s^(df−1) exp(−df s²/2),
- * on the variable x of ln s = x − exp(−x)+1 for few degrees of freedom (which makes the left tail fall
+ * on the variable x of ln s = x − exp(−x) + 1 for few degrees of freedom (which makes the left tail fall
  * doubly exponentially) and on ln s itself for many.
  */
 function scaleRule(df: number): Scale {
@@ -65,7 +29,8 @@ function scaleRule(df: number): Scale {
   const few = df < 12;
   const constant = Math.LN2 + (df / 2) * Math.log(df / 2) - logGamma(df / 2);
   const width = 1 / Math.sqrt(2 * df);
-  const step = few ? Math.min(0.08, 0.3 * width) : 0.45 * width;
+  // The tail of the range multiplies the density and narrows it: steps are finer than the density needs.
+  const step = few ? Math.min(0.035, 0.12 * width) : 0.2 * width;
   const floor = -64;
   const at: number[] = [];
   const mass: number[] = [];
@@ -89,10 +54,10 @@ function tail(q: number, k: number, df: number, upper: boolean): number {
   if (q <= 0) return upper ? 1 : 0;
   if (q === Infinity) return upper ? 0 : 1;
   if (k === 2 && upper) return tTwoSided(q * Math.SQRT1_2, df);
-  if (df === Infinity) return rangeTail(q, k, upper);
+  if (df === Infinity) return normalRangeTail(q, k, upper);
   const { at, mass } = scaleRule(df);
   let sum = 0;
-  for (let i = 0; i < at.length; i += 1) sum += mass[i] * rangeTail(q * at[i], k, upper);
+  for (let i = 0; i < at.length; i += 1) sum += mass[i] * normalRangeTail(q * at[i], k, upper);
   return Math.min(1, sum);
 }
 
@@ -106,7 +71,7 @@ function check(k: number, df: number): void {
  * Upper tail of the studentized range, P(Q > q), for k means (2 to 200) and df ≥ 1 (Infinity allowed).
  * Q is the range of k independent standard normals over √(χ²_df / df). q ≤ 0 gives 1.
  * Throws on NaN, k out of range, df < 1. Computed directly; relative error below 1e-10.
- * Source: definition (Tukey 1953; Lund & Lund 1983), by an own trapezoidal rule in both integrals.
+ * Source: definition (Tukey 1953; Lund & Lund 1983), by trapezoidal rules in both integrals.
  */
 export function studentizedRangeSf(q: number, k: number, df: number): number {
   requireNumber(q, 'q');
