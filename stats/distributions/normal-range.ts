@@ -1,17 +1,32 @@
 import erfc from '@stdlib/math-base-special-erfc';
 
-/** The trapezoidal rule converges exponentially on these integrands; the grid holds Φ and φ·step. */
 const LOW = -8.75;
-const STEP = 0.25;
-const GRID = 320;
+const HIGH = 32;
 const INV_SQRT_2PI = 0.3989422804014327;
-const phi = new Float64Array(GRID);
-const cdf = new Float64Array(GRID);
-for (let j = 0; j < GRID; j += 1) {
-  const z = LOW + j * STEP;
-  phi[j] = STEP * INV_SQRT_2PI * Math.exp(-0.5 * z * z);
-  cdf[j] = 0.5 * erfc(-z * Math.SQRT1_2);
+
+interface Grid {
+  readonly step: number;
+  /** φ(z)·step at LOW + j·step. */
+  readonly phi: Float64Array;
+  /** Φ(z) there. */
+  readonly cdf: Float64Array;
 }
+
+function makeGrid(step: number): Grid {
+  const size = Math.round((HIGH - LOW) / step) + 1;
+  const phi = new Float64Array(size);
+  const cdf = new Float64Array(size);
+  for (let j = 0; j < size; j += 1) {
+    const z = LOW + j * step;
+    phi[j] = step * INV_SQRT_2PI * Math.exp(-0.5 * z * z);
+    cdf[j] = 0.5 * erfc(-z * Math.SQRT1_2);
+  }
+  return { step, phi, cdf };
+}
+
+/** The trapezoidal rule converges exponentially here; many means make the integrand narrow. */
+const coarse = makeGrid(0.25);
+let fine: Grid | undefined;
 
 /**
  * P(range of k standard normals > w), or ≤ w with `upper` false, for w > 0. From the largest value z:
@@ -19,13 +34,14 @@ for (let j = 0; j < GRID; j += 1) {
  * The lower tail falls as w^(k−1) near 0 and is given without that factor.
  */
 function integrate(w: number, k: number, upper: boolean): number {
+  const { step, phi, cdf } = k <= 16 ? coarse : (fine ??= makeGrid(0.0625));
   // Past z = 9 the density is below 1e-18; far tails peak near w/2.
-  const last = Math.min(GRID - 1, Math.ceil((Math.max(9, w / 2 + 6) - LOW) / STEP));
+  const last = Math.min(phi.length - 1, Math.ceil((Math.max(9, w / 2 + 6) - LOW) / step));
   const m = k - 1;
   let sum = 0;
   for (let j = 0; j <= last; j += 1) {
     const whole = cdf[j];
-    const below = 0.5 * erfc((w - (LOW + j * STEP)) * Math.SQRT1_2);
+    const below = 0.5 * erfc((w - (LOW + j * step)) * Math.SQRT1_2);
     if (upper) {
       const ratio = below / whole;
       const share = ratio < 1 ? -Math.expm1(m * Math.log1p(-ratio)) : 1;
