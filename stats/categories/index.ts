@@ -1,0 +1,6 @@
+export * from './mcnemar';
+export * from './cochran-q';
+export * from './wilcoxon';
+export * from './just-about-right';
+export * from './paired-preference';
+export * from './correspondence';
