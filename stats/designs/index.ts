@@ -1,0 +1,3 @@
+export * from './williams';
+export * from './balance';
+export * from './orders';

@@ -1,0 +1,4 @@
+/** The one public face of the statistics: every function, table and type that other code may use. */
+export { StatsError, type StatsErrorCode } from './errors';
+export * from './distributions';
+export * from './designs';
