@@ -1,0 +1,31 @@
+import 'server-only';
+import { ballotItems, sampleComponents, samples, sessionPourers } from '@/db/schema';
+import type { Db, Tx } from '@/db/client';
+import { and, eq } from 'drizzle-orm';
+import { methodOf } from '../methods';
+import type { SessionRow } from './find';
+
+/** What still keeps a draft from being sealed, in words for the leader; empty when nothing does. */
+export function listMissing(db: Tx | Db, session: SessionRow): string[] {
+  const method = methodOf(session.method);
+  const missing: string[] = [];
+  const own = db.select().from(samples).where(and(eq(samples.sessionId, session.id), eq(samples.cellarId, session.cellarId))).all();
+  const { min, max } = method.sampleCount;
+  if (own.length < min || own.length > max) {
+    missing.push(min === max ? `${method.name} takes ${min} samples; there ${own.length === 1 ? 'is 1' : `are ${own.length}`}.` : `${method.name} takes ${min} to ${max} samples; there ${own.length === 1 ? 'is 1' : `are ${own.length}`}.`);
+  }
+  for (const sample of own) {
+    if (sample.isControl) continue;
+    const parts = db.select().from(sampleComponents).where(eq(sampleComponents.sampleId, sample.id)).all();
+    const total = parts.reduce((sum, part) => sum + part.share, 0);
+    if (parts.length === 0) missing.push(`${sample.label} has no pull.`);
+    else if (Math.abs(total - 1) > 1e-6) missing.push(`The parts of ${sample.label} add up to ${Math.round(total * 100)} %, not 100 %.`);
+  }
+  if (method.hasItems) {
+    const lines = db.select().from(ballotItems).where(eq(ballotItems.sessionId, session.id)).all();
+    if (!lines.some((line) => line.kind === 'line')) missing.push('The ballot has no descriptor to score.');
+  }
+  const pourers = db.select().from(sessionPourers).where(eq(sessionPourers.sessionId, session.id)).all();
+  if (pourers.length === 0) missing.push('Nobody is named to pour: without a pourer nobody could read which bottle gets which code.');
+  return missing;
+}
