@@ -2,3 +2,4 @@
 export { StatsError, type StatsErrorCode } from './errors';
 export * from './distributions';
 export * from './designs';
+export * from './discrimination';

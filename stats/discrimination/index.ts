@@ -1,0 +1,11 @@
+export { CHANCE, type Protocol } from './protocols';
+export { binomialTest, minimumCorrect, type BinomialTest, type Sides } from './binomial-test';
+export { clopperPearson, distinguishers, type Distinguishers, type Limits, type ProportionLimits } from './distinguishers';
+export * from './power';
+export * from './similarity';
+export * from './psychometric';
+export * from './d-prime';
+export { betaBinomial, type BetaBinomialFit } from './beta-binomial';
+export * from './sequential';
+export * from './sorting';
+export * from './threshold';
