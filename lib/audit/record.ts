@@ -2,6 +2,7 @@ import 'server-only';
 import { auditEvents } from '@/db/schema';
 import type { Db, Tx } from '@/db/client';
 import { desc, eq } from 'drizzle-orm';
+import { now } from '../clock';
 import { sha256Hex } from '../ids';
 
 export interface AuditEntry {
@@ -38,7 +39,7 @@ export function recordAudit(tx: Tx | Db, entry: AuditEntry): void {
   const row: Chained = {
     cellarId: entry.cellarId,
     seq: (last?.seq ?? 0) + 1,
-    at: new Date(),
+    at: now(),
     actorUserId: entry.actorUserId ?? null,
     actorSeatId: entry.actorSeatId ?? null,
     action: entry.action,

@@ -8,7 +8,7 @@ import { decrypt, encrypt } from './cipher';
 import { canonicalText, parsePlanFile, type PlanFile } from './plan-file';
 
 /**
- * The one place that puts a key to rest and takes it out. Nothing outside `lib/blind` and the
+ * The one place that puts a key to rest and takes it out. Nothing outside `lib/blind`, the demo and the
  * session's life cycle calls it; every call of `takeOut` stands beside an audit entry.
  */
 

@@ -6,6 +6,7 @@ import { recordAudit } from '../audit/record';
 import { requireCapability, type Access } from '../auth/access';
 import { takeOut } from '../blind/vault';
 import { AppError } from '../errors';
+import { now } from '../clock';
 import { newId } from '../ids';
 import { findSession, requireState } from './find';
 import { closeAndUnseal } from './lifecycle';
@@ -24,7 +25,7 @@ export function requestEarlyOpening(access: Access, sessionId: string, code: str
       throw new AppError('invalid', 'No glass of this session has that code.', { code: 'No glass has this code' });
     }
     const id = newId();
-    tx.insert(earlyOpenings).values({ id, cellarId: session.cellarId, sessionId, code, reason, requestedBy: access.user.id, requestedAt: new Date() }).run();
+    tx.insert(earlyOpenings).values({ id, cellarId: session.cellarId, sessionId, code, reason, requestedBy: access.user.id, requestedAt: now() }).run();
     recordAudit(tx, {
       cellarId: session.cellarId, sessionId, actorUserId: access.user.id, action: 'early_opening.requested',
       subjectType: 'early_opening', subjectId: id, detail: { scope: code === null ? 'session' : 'one code', reason },
@@ -48,10 +49,10 @@ export function decideEarlyOpening(access: Access, openingId: string, isApproved
   getDb().transaction((tx) => {
     const opening = findOpening(tx, access.cellar.id, openingId);
     if (opening.requestedBy === access.user.id && isApproved) throw new AppError('forbidden', 'A second person must approve: not the one who asked.');
-    const now = new Date();
+    const at = now();
     const decided = tx
       .update(earlyOpenings)
-      .set(isApproved ? { approvedBy: access.user.id, approvedAt: now } : { refusedAt: now })
+      .set(isApproved ? { approvedBy: access.user.id, approvedAt: at } : { refusedAt: at })
       .where(and(eq(earlyOpenings.id, openingId), isNull(earlyOpenings.approvedAt), isNull(earlyOpenings.refusedAt)))
       .run();
     if (decided.changes !== 1) throw new AppError('conflict', 'That request was decided before.');

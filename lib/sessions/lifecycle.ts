@@ -6,6 +6,7 @@ import { recordAudit } from '../audit/record';
 import { requireCapability, type Access } from '../auth/access';
 import { takeOut } from '../blind/vault';
 import { AppError } from '../errors';
+import { now } from '../clock';
 import { sha256Hex } from '../ids';
 import { findSession, requireState, type SessionRow } from './find';
 
@@ -32,7 +33,7 @@ export function openSession(access: Access, sessionId: string): void {
   getDb().transaction((tx) => {
     const session = findSession(tx, access.cellar.id, sessionId);
     requireState(session, 'sealed');
-    change(tx, session, { state: 'open', openedAt: new Date() });
+    change(tx, session, { state: 'open', openedAt: now() });
     audit(tx, access, session, 'session.opened');
   }, { behavior: 'immediate' });
 }
@@ -66,7 +67,7 @@ function closeIn(tx: Tx, access: Access, session: SessionRow, reason: string | n
     throw new AppError('conflict', `Seats ${owing.join(', ')} have not handed in. Wait for them, or close with a reason.`, { reason: 'Say why it is closed without them' });
   }
   const { count, digest } = answersDigest(tx, session.id);
-  change(tx, session, { state: 'closed', closedAt: new Date(), joinCode: null, closeReason: owing.length > 0 ? reason : null });
+  change(tx, session, { state: 'closed', closedAt: now(), joinCode: null, closeReason: owing.length > 0 ? reason : null });
   audit(tx, access, session, 'session.closed', { answers: count, digest, owing: owing.join(' '), reason });
 }
 
@@ -101,7 +102,7 @@ function writeKey(tx: Tx, session: SessionRow): void {
 
 function unsealIn(tx: Tx, access: Access, session: SessionRow, detail: Record<string, string | boolean> = {}): void {
   requireState(session, 'closed');
-  change(tx, session, { state: 'unsealed', unsealedAt: new Date() });
+  change(tx, session, { state: 'unsealed', unsealedAt: now() });
   writeKey(tx, session);
   audit(tx, access, session, 'session.unsealed', detail);
 }
@@ -116,7 +117,7 @@ export function unsealSession(access: Access, sessionId: string): void {
 export function closeAndUnseal(tx: Tx, access: Access, sessionId: string, reason: string): void {
   const session = findSession(tx, access.cellar.id, sessionId);
   if (session.state === 'sealed') {
-    change(tx, session, { state: 'open', openedAt: new Date() });
+    change(tx, session, { state: 'open', openedAt: now() });
     return closeAndUnseal(tx, access, sessionId, reason);
   }
   if (session.state === 'open') {
@@ -132,7 +133,7 @@ export function abandonSession(access: Access, sessionId: string, reason: string
   getDb().transaction((tx) => {
     const session = findSession(tx, access.cellar.id, sessionId);
     if (session.state === 'abandoned') throw new AppError('wrong_state');
-    change(tx, session, { state: 'abandoned', abandonedAt: new Date(), abandonReason: reason, joinCode: null });
+    change(tx, session, { state: 'abandoned', abandonedAt: now(), abandonReason: reason, joinCode: null });
     audit(tx, access, session, 'session.abandoned', { from: session.state, reason });
   }, { behavior: 'immediate' });
 }

@@ -8,6 +8,7 @@ import { requireCapability, type Access } from '../auth/access';
 import type { PlanFile } from '../blind/plan-file';
 import { putAway } from '../blind/vault';
 import { AppError } from '../errors';
+import { now } from '../clock';
 import { newId } from '../ids';
 import { methodOf } from '../methods';
 import { systemDraw } from '../methods/draw';
@@ -89,7 +90,7 @@ export function sealSession(access: Access, sessionId: string, draw: Draw = syst
     const missing = listMissing(tx, session);
     if (missing.length > 0) throw new AppError('invalid', missing.join(' '));
 
-    const sealedAt = new Date();
+    const sealedAt = now();
     const ballot = fixBallot(tx, session);
     const described = describeSamples(tx, session);
     const seatIds = makeSeats(tx, session);

@@ -1,6 +1,5 @@
-import { dealOrders, williamsSquare } from '@/stats';
+import { dealOrders, shuffled, williamsSquare } from '@/stats';
 import { drawCodes } from '../codes';
-import { shuffled } from '../shuffle';
 import type { MethodDescription, PlannedServing } from '../types';
 
 /** Glasses of tannic or strong wine that a palate bears in one flight (common practice). */

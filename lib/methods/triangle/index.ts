@@ -1,4 +1,4 @@
-import { dealOrders, smallestPanel, triangleOrders } from '@/stats';
+import { dealOrders, smallestPanel, TRIANGLE_ORDERS } from '@/stats';
 import { ALL_CODES, drawCodes } from '../codes';
 import type { Draw, MethodDescription, PlannedServing } from '../types';
 
@@ -31,7 +31,7 @@ export const triangle: MethodDescription = {
     const codes = codesBySeat(seatCount, replicates * GLASSES, draw);
     const servings: PlannedServing[] = [];
     for (let block = 1; block <= replicates; block += 1) {
-      dealOrders(triangleOrders(), seatCount, draw).forEach((order, seatIndex) => {
+      dealOrders(TRIANGLE_ORDERS, seatCount, draw).forEach((order, seatIndex) => {
         order.forEach((letter, place) => {
           const code = codes[seatIndex]![(block - 1) * GLASSES + place]!;
           servings.push({ seat: seatIndex + 1, block, position: place + 1, code, sample: letter + 1 });
