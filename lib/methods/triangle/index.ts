@@ -1,4 +1,4 @@
-import { dealOrders, smallestPanel, TRIANGLE_ORDERS } from '@/stats';
+import { CHANCE, dealOrders, proportionFromDistinguishers, smallestPanel, TRIANGLE_ORDERS } from '@/stats';
 import { ALL_CODES, drawCodes } from '../codes';
 import type { Draw, MethodDescription, PlannedServing } from '../types';
 
@@ -44,7 +44,7 @@ export const triangle: MethodDescription = {
   warnings({ seatCount, replicates }) {
     const warnings: string[] = [];
     if (seatCount % 6 !== 0) warnings.push('The six orders come equally often with six seats or a multiple of six.');
-    const needed = smallestPanel({ chance: 1 / 3, alpha: 0.05, beta: 0.2, proportion: 0.5 }).first;
+    const needed = smallestPanel(0.8, { chance: CHANCE.triangle, alpha: 0.05, pc: proportionFromDistinguishers(0.5, CHANCE.triangle) }).first;
     if (seatCount * replicates < needed) {
       warnings.push(`${seatCount * replicates} answers can show only a gross difference; ${needed} show one that half of the people taste (5 % and 20 % risk).`);
     }
