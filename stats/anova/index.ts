@@ -1,0 +1,3 @@
+export { balancedScores, type BalancedScores, type LongScores } from './balanced-scores';
+export { profileAnova, type AnovaLine, type ProfileAnova, type TestedLine } from './profile-anova';
+export { mixedAssessorModel, type MixedAssessorModel } from './mixed-assessor';
