@@ -30,7 +30,7 @@ export function insertPeople(tx: Tx, passwordHashes: Record<DemoPerson['key'], s
     tx.insert(memberships).values({ cellarId, userId, createdAt: at }).run();
     for (const role of person.roles) tx.insert(membershipRoles).values({ cellarId, userId, role }).run();
   }
-  fillLexicon(tx, cellarId, ESTATE.drink);
+  fillLexicon(tx, cellarId);
   return { cellarId, userIds };
 }
 
