@@ -1,0 +1,176 @@
+import type { OperationKind, SeatRole } from '@/db/enums';
+
+/** One operation, as far as counting needs it. */
+export interface OperationFact {
+  seatId: string;
+  generation: number;
+  seq: number;
+  receiptNo: number;
+  kind: OperationKind;
+  block: number | null;
+  position: number | null;
+  item: number | null;
+  number: number | null;
+  text: string | null;
+  isGuess: boolean | null;
+  isLate: boolean;
+}
+
+/** The answers of a session that count: one per seat, glass and line. */
+export interface CountedAnswers {
+  scores: OperationFact[];
+  faults: OperationFact[];
+  choices: OperationFact[];
+  comments: OperationFact[];
+  replaced: number;
+  cleared: number;
+  late: Map<string, number>;
+}
+
+/** What an operation is an answer to; a score and taking it back share the place. */
+function placeOf(op: OperationFact): string {
+  const kind = op.kind === 'clear' ? 'score' : op.kind;
+  // A set has one choice, whichever glass it names.
+  const position = op.kind === 'choice' ? '' : op.position;
+  return `${op.seatId}/${kind}/${op.block}/${position}/${op.item ?? ''}`;
+}
+
+/**
+ * Whether `op` stands and `kept` gives way. The latest value counts, by the seat's generation and
+ * then the phone's own count; of a choice, which is final, the first one received.
+ */
+function standsOver(op: OperationFact, kept: OperationFact): boolean {
+  if (op.kind === 'choice') return op.receiptNo < kept.receiptNo;
+  if (op.generation !== kept.generation) return op.generation > kept.generation;
+  if (op.seq !== kept.seq) return op.seq > kept.seq;
+  return op.receiptNo > kept.receiptNo;
+}
+
+/** Sorts what counts from what was late, replaced or taken back. Late operations count nowhere. */
+export function countAnswers(operations: readonly OperationFact[]): CountedAnswers {
+  const standing = new Map<string, OperationFact>();
+  const late = new Map<string, number>();
+  let replaced = 0;
+  for (const op of operations) {
+    if (op.kind === 'submit') continue;
+    if (op.isLate) {
+      late.set(op.seatId, (late.get(op.seatId) ?? 0) + 1);
+      continue;
+    }
+    const place = placeOf(op);
+    const kept = standing.get(place);
+    if (kept) replaced += 1;
+    if (!kept || standsOver(op, kept)) standing.set(place, op);
+  }
+  const answers: CountedAnswers = { scores: [], faults: [], choices: [], comments: [], replaced, cleared: 0, late };
+  for (const op of standing.values()) {
+    if (op.kind === 'score' && op.number !== null) answers.scores.push(op);
+    else if (op.kind === 'clear') answers.cleared += 1;
+    else if (op.kind === 'fault' && op.number === 1) answers.faults.push(op);
+    else if (op.kind === 'choice') answers.choices.push(op);
+    else if (op.kind === 'comment' && op.text?.trim()) answers.comments.push(op);
+  }
+  return answers;
+}
+
+/** A glass whose sample is known, after unsealing. */
+export interface GlassFact {
+  seatId: string;
+  block: number;
+  position: number;
+  code: string;
+  sample: number;
+}
+
+export interface SeatFact {
+  id: string;
+  number: number;
+  isReserve: boolean;
+  isClaimed: boolean;
+  isSubmitted: boolean;
+  hasLeft: boolean;
+  role: SeatRole;
+  name: string | null;
+}
+
+/** One score in the long form that statistics take. */
+export interface LongScore {
+  assessor: number;
+  product: number;
+  replicate: number;
+  score: number;
+}
+
+const glassKey = (seatId: string, block: number | null, position: number | null) => `${seatId}/${block}/${position}`;
+
+/** Finds the sample of a glass by seat, block and position. */
+export function glassFinder(glasses: readonly GlassFact[]): (op: OperationFact) => GlassFact | undefined {
+  const byPlace = new Map(glasses.map((glass) => [glassKey(glass.seatId, glass.block, glass.position), glass]));
+  return (op) => byPlace.get(glassKey(op.seatId, op.block, op.position));
+}
+
+/** The counted scores by ballot line: assessor = seat number, product = sample, replicate = block. */
+export function longScores(scores: readonly OperationFact[], glasses: readonly GlassFact[], seats: readonly SeatFact[]): Map<number, LongScore[]> {
+  const find = glassFinder(glasses);
+  const numberOf = new Map(seats.map((seat) => [seat.id, seat.number]));
+  const lines = new Map<number, LongScore[]>();
+  for (const op of scores) {
+    const glass = find(op);
+    const assessor = numberOf.get(op.seatId);
+    if (!glass || assessor === undefined || op.item === null || op.number === null) continue;
+    const row = { assessor, product: glass.sample, replicate: glass.block, score: op.number };
+    const line = lines.get(op.item);
+    if (line) line.push(row);
+    else lines.set(op.item, [row]);
+  }
+  for (const line of lines.values()) line.sort((a, b) => a.assessor - b.assessor || a.product - b.product || a.replicate - b.replicate);
+  return lines;
+}
+
+/** A line's scores split by whether the panelist scored every glass on it. */
+export interface SplitScores {
+  complete: LongScore[];
+  /** Panelists in `complete`, by seat number. */
+  assessors: number[];
+  /** Panelists with some scores missing, by seat number. */
+  leftOut: number[];
+}
+
+/** Keeps the panelists who scored all `products` × `replicates` glasses: a balanced table. */
+export function completeScores(rows: readonly LongScore[], products: number, replicates: number): SplitScores {
+  const byAssessor = new Map<number, LongScore[]>();
+  for (const row of rows) byAssessor.set(row.assessor, [...(byAssessor.get(row.assessor) ?? []), row]);
+  const split: SplitScores = { complete: [], assessors: [], leftOut: [] };
+  for (const [assessor, own] of [...byAssessor].sort(([a], [b]) => a - b)) {
+    if (own.length === products * replicates) {
+      split.complete.push(...own);
+      split.assessors.push(assessor);
+    } else split.leftOut.push(assessor);
+  }
+  return split;
+}
+
+/** One set of a triangle test as answered; null when the seat did not answer it. */
+export interface TriangleAnswer {
+  seat: number;
+  set: number;
+  isCorrect: boolean | null;
+  isGuess: boolean;
+}
+
+/** Whether each chosen glass was the odd one: the only glass of its sample in the set. */
+export function triangleAnswers(choices: readonly OperationFact[], glasses: readonly GlassFact[], seats: readonly SeatFact[]): TriangleAnswer[] {
+  const chosen = new Map(choices.map((op) => [`${op.seatId}/${op.block}`, op]));
+  const answers: TriangleAnswer[] = [];
+  for (const seat of seats.filter((s) => s.isClaimed)) {
+    const own = glasses.filter((glass) => glass.seatId === seat.id);
+    for (const set of [...new Set(own.map((glass) => glass.block))].sort((a, b) => a - b)) {
+      const glassesOfSet = own.filter((glass) => glass.block === set);
+      const choice = chosen.get(`${seat.id}/${set}`);
+      const picked = choice && glassesOfSet.find((glass) => glass.position === choice.position);
+      const isCorrect = picked ? glassesOfSet.filter((glass) => glass.sample === picked.sample).length === 1 : null;
+      answers.push({ seat: seat.number, set, isCorrect, isGuess: choice?.isGuess ?? false });
+    }
+  }
+  return answers;
+}

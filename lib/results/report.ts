@@ -1,0 +1,69 @@
+import type { Allergen } from '@/db/enums';
+import type { SessionRow } from '../sessions/find';
+import { showMoment } from '../time';
+import { count, DRAW_WORDS, listWords, METHOD_WORDS, showPercent, VESSEL_WORDS } from './format';
+import type { CountsView, EarlyOpeningView, ReportItem, SampleView } from './types';
+
+const ALLERGEN_WORDS: Record<Allergen, string> = { sulfites: 'sulfites', egg: 'egg', milk: 'milk', nuts: 'nuts', honey: 'honey', gluten: 'gluten (crackers)' };
+
+function identity(sample: SampleView): string {
+  const parts = sample.components.map((c) => {
+    const share = sample.components.length > 1 ? `${showPercent(c.share)} ` : '';
+    return `${share}${VESSEL_WORDS[c.vesselKind].toLowerCase()} ${c.vessel}, lot ${c.lot}, pulled ${c.pulledOn} ${DRAW_WORDS[c.drawMethod]}`;
+  });
+  const codes = sample.codes.length > 0 ? `; poured as ${listWords(sample.codes)}` : '';
+  return `${sample.label}${sample.isControl ? ' (control)' : ''}${parts.length > 0 ? `: ${parts.join(' + ')}` : ''}${codes}`;
+}
+
+const ORDERS = {
+  profile: 'Williams squares, balanced for position and for what came before, dealt in whole squares and drawn anew for each flight',
+  triangle: 'The six orders, dealt in blocks of six and drawn anew for each set (ISO 4120, clause 7.1)',
+};
+
+interface ReportQuestion {
+  session: SessionRow;
+  aim: string;
+  frame: { leader: string; pourers: string[]; commitment: string | null };
+  samples: readonly SampleView[];
+  counts: CountsView;
+  early: readonly EarlyOpeningView[];
+  timeZone: string;
+  checkHref: string | null;
+}
+
+function panelWords(session: SessionRow, counts: CountsView): string {
+  const missing = [
+    counts.seatsEmpty.length > 0 && `nobody came to ${listWords(counts.seatsEmpty)}`,
+    counts.seatsLeft.length > 0 && `${listWords(counts.seatsLeft)} left`,
+    counts.seatsSilent.length > 0 && `${listWords(counts.seatsSilent)} answered nothing`,
+  ].filter(Boolean) as string[];
+  const whole = `${count(session.seatsPlanned, 'seat')} planned, ${counts.seatsTaken} taken, ${counts.seatsSubmitted} handed in`;
+  return missing.length > 0 ? `${whole}; seats missing: ${missing.join('; ')}` : whole;
+}
+
+/** The items that a report of the test owes (ISO 4120 and ISO 13299 in outline), and what was not recorded. */
+export function reportItems({ session, aim, frame, samples, counts, early, timeZone, checkHref }: ReportQuestion): ReportItem[] {
+  const when = (at: Date | null) => (at ? showMoment(at, timeZone) : 'not');
+  const items: (ReportItem | false)[] = [
+    { name: 'Aim', text: aim },
+    { name: 'Method', text: METHOD_WORDS[session.method] },
+    ...samples.map((sample) => ({ name: sample.isControl ? 'Control' : 'Sample', text: identity(sample) })),
+    { name: 'Panel', text: panelWords(session, counts) },
+    { name: session.method === 'profile' ? 'Replicates' : 'Sets each', text: String(session.replicates) },
+    { name: 'Risk', text: `alpha ${showPercent(session.alpha)}, chosen before serving` },
+    { name: 'Scale', text: session.method === 'profile' ? 'Line from 0 to 100 in steps of 1, anchored in words at both ends, no number shown before the touch' : 'Forced choice of one glass of three; a guess is said' },
+    { name: 'Orders', text: ORDERS[session.method] },
+    { name: 'Serving', text: [session.servingTemperatureC !== null ? `${session.servingTemperatureC} °C` : 'temperature not recorded', `${session.servingVolumeMl} mL`, `${session.restS} s rest between glasses`, 'spit'].join(', ') },
+    { name: 'Instruction', text: session.instruction },
+    { name: 'Declared', text: session.allergens.length > 0 ? session.allergens.map((a) => ALLERGEN_WORDS[a]).join(', ') : 'no allergen' },
+    { name: 'Times', text: `sealed ${when(session.sealedAt)}; opened ${when(session.openedAt)}; closed ${when(session.closedAt)}; unsealed ${when(session.unsealedAt)}` },
+    { name: 'Leader', text: frame.leader },
+    { name: 'Poured by', text: frame.pourers.length > 0 ? `${listWords(frame.pourers)}: read the key before unsealing and did not taste` : 'nobody was named to read the key' },
+    { name: 'Answers', text: `${counts.counted} counted, ${counts.unanswered} not given, ${counts.cleared} taken back, ${counts.replaced} changed before close (earlier values are kept), ${counts.late} late and set aside` },
+    session.closeReason !== null && { name: 'Closed early', text: session.closeReason },
+    ...early.map((opening) => ({ name: 'Early opening', text: `${opening.scope}, asked by ${opening.requestedBy} on ${opening.requestedOn}: ${opening.reason}. ${opening.decision}` })),
+    frame.commitment !== null && { name: 'Commitment', text: frame.commitment, ...(checkHref && { href: checkHref }) },
+    { name: 'Not recorded', text: 'room and light, panelists’ training, whether they tasted at one time or in turn' },
+  ];
+  return items.filter((item) => item !== false);
+}

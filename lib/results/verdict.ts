@@ -1,0 +1,120 @@
+import type { SampleView } from './types';
+import { count, listWords, sayP, shortName, showPercent } from './format';
+import { wereShownToDiffer } from './profile-line';
+import type { CellView, LineView, ProfileView, TriangleView, VerdictView } from './types';
+
+type Names = ReadonlyMap<number, string>;
+
+const namesOf = (samples: readonly SampleView[]): Names => new Map(samples.map((sample) => [sample.sample, shortName(sample)]));
+
+const lower = (name: string) => name.charAt(0).toLowerCase() + name.slice(1);
+
+/** "Barrel 31" at the head of a sentence, for a barrel known by its number; else the sample's label. */
+const headName = (samples: readonly SampleView[], sample: number) => samples.find((s) => s.sample === sample)?.label ?? '';
+
+interface Standing {
+  line: LineView;
+  /** Shown to differ from every other sample, on that side. */
+  aloneHigh: number | null;
+  aloneLow: number | null;
+}
+
+function standingOf(line: LineView): Standing {
+  const sorted = [...line.cells].sort((a, b) => b.mean - a.mean);
+  const isAlone = (cell: CellView) => line.cells.every((other) => other === cell || wereShownToDiffer(cell, other));
+  const top = sorted[0];
+  const bottom = sorted[sorted.length - 1];
+  return { line, aloneHigh: top && isAlone(top) ? top.sample : null, aloneLow: bottom && isAlone(bottom) ? bottom.sample : null };
+}
+
+const hasPair = (line: LineView) => line.cells.some((a) => line.cells.some((b) => wereShownToDiffer(a, b)));
+
+function aloneSentences(standings: readonly Standing[], samples: readonly SampleView[]): string[] {
+  return samples.flatMap(({ sample, label }) => {
+    const above = standings.filter((s) => s.aloneHigh === sample).map((s) => lower(s.line.name));
+    const below = standings.filter((s) => s.aloneLow === sample).map((s) => lower(s.line.name));
+    const others = samples.length === 2 ? 'the other' : 'all the others';
+    const parts = [above.length > 0 && `above ${others} in ${listWords(above)}`, below.length > 0 && `below ${others} in ${listWords(below)}`].filter(Boolean) as string[];
+    return parts.length > 0 ? [`${label} stands ${listWords(parts)}.`] : [];
+  });
+}
+
+/** Lines on which nothing stands alone: the highest, and what it was shown to lie above. */
+function pairSentence(line: LineView, names: Names, samples: readonly SampleView[]): string {
+  const sorted = [...line.cells].sort((a, b) => b.mean - a.mean);
+  const top = sorted.find((cell) => line.cells.some((other) => other.mean < cell.mean && wereShownToDiffer(cell, other)))!;
+  const under = sorted.filter((cell) => cell.mean < top.mean && wereShownToDiffer(cell, top)).map((cell) => names.get(cell.sample)!);
+  return `${line.name}: ${lower(headName(samples, top.sample))} was scored higher than ${listWords(under)}; ${samples.length > under.length + 1 ? 'its distance to the others was not shown' : 'no more was shown'}.`;
+}
+
+function shownSentences(shown: readonly LineView[], samples: readonly SampleView[]): string[] {
+  const names = namesOf(samples);
+  const standings = shown.filter(hasPair).map(standingOf);
+  // Of two samples the higher one says it all.
+  const sided = samples.length === 2 ? standings.map((s) => ({ ...s, aloneLow: null })) : standings;
+  const open = standings.filter((s) => s.aloneHigh === null && s.aloneLow === null);
+  return [
+    ...aloneSentences(sided, samples),
+    ...open.map((s) => pairSentence(s.line, names, samples)),
+    ...shown.filter((line) => !hasPair(line)).map((line) => `${line.name}: a difference was shown over all (${sayP(line.product!.p)}), but not for any single pair.`),
+  ];
+}
+
+function range(values: readonly number[]): string {
+  const [low, high] = [Math.min(...values), Math.max(...values)];
+  return Math.round(low) === Math.round(high) ? `${Math.round(low)} points` : `${Math.round(low)} to ${Math.round(high)} points`;
+}
+
+function profileReach(notShown: readonly LineView[], profile: ProfileView): string[] {
+  const reach: string[] = [];
+  const missed = notShown.flatMap((line) => line.smallestDifference ?? []);
+  if (missed.length > 0) {
+    reach.push(`Not shown is not alike: on ${missed.length === 1 ? 'that line' : 'those lines'} this panel could have shown no difference between two samples smaller than ${range(missed)} of 100.`);
+  }
+  reach.push('It speaks of these pulls, on that day, to this panel. How much of a trait is wanted, and whether a barrel is ready, the cellar decides.');
+  if (profile.lines.some((line) => line.product)) reach.push('Barrels of one lot differ: what is shown of a barrel is not shown of its lot.');
+  return reach;
+}
+
+/** What a profile session says, in sentences. */
+export function profileVerdict(profile: ProfileView, samples: readonly SampleView[]): VerdictView {
+  const tested = profile.lines.filter((line) => line.product !== null);
+  const shown = tested.filter((line) => line.product!.p <= profile.alpha);
+  const notShown = tested.filter((line) => line.product!.p > profile.alpha);
+  if (tested.length === 0) {
+    const why = [...new Set(profile.lines.flatMap((line) => line.whyNot ?? []))];
+    return { headline: 'Nothing could be tested.', sentences: why.slice(0, 3), reach: ['The means below say what was scored, and no more.'] };
+  }
+  if (shown.length === 0) {
+    const what = tested.length === 1 ? `in ${lower(tested[0]!.name)}` : `on any of the ${tested.length} lines`;
+    return { headline: `No difference was shown ${what}.`, sentences: [], reach: profileReach(notShown, profile) };
+  }
+  const headline = tested.length === 1 ? `The panel told the samples apart in ${lower(shown[0]!.name)}.` : `The panel told the samples apart on ${shown.length} of ${tested.length} lines.`;
+  const sentences = shownSentences(shown, samples);
+  if (notShown.length > 0) sentences.push(`No difference was shown in ${listWords(notShown.map((line) => lower(line.name)), 'or')}.`);
+  return { headline, sentences, reach: profileReach(notShown, profile) };
+}
+
+function limitsWords({ value, lower: low, upper: high }: NonNullable<TriangleView['pd']>): string {
+  const best = value <= 0 ? 'none' : showPercent(value);
+  return `The best guess of the share of people who taste a difference is ${best}; ${low <= 0 ? 'none' : showPercent(low)} to ${showPercent(Math.max(0, high))} would fit these answers too.`;
+}
+
+/** What a triangle session says, in sentences. */
+export function triangleVerdict(triangle: TriangleView): VerdictView {
+  const { n, correct, p, minimumCorrect: least, pd, isShown, alpha } = triangle;
+  if (p === null || pd === null) return { headline: 'Nothing could be tested.', sentences: [triangle.whyNot ?? ''], reach: [] };
+  const headline = `${isShown ? 'A difference was shown' : 'No difference was shown'}: ${correct} of ${n} found the odd glass.`;
+  const needed = least === null ? `With ${count(n, 'answer')} no number correct would have been enough at ${showPercent(alpha)}.` : `${least} of ${n} were needed at ${showPercent(alpha)} risk.`;
+  const sentences = [`${needed} Guessing alone gives ${correct} or more with ${sayP(p)}.`, limitsWords(pd)];
+  if (triangle.guesses > 0) sentences.push(`${triangle.guesses} of ${n} said that they guessed; ${triangle.correctGuesses} of those ${triangle.correctGuesses === 1 ? 'was' : 'were'} right.`);
+  const half = triangle.power.find((point) => point.pd === 0.3);
+  const reach = isShown
+    ? ['It says that the two differ, not in what, nor which is better: a paired test or a profile answers that.', 'It speaks of these two pulls, on that day, to this panel.']
+    : [
+        `Not shown is not alike: had ${showPercent(half!.pd)} of people tasted a difference, this test would have shown it with a chance of ${showPercent(half!.power)}.`,
+        'To claim likeness, plan a test for it beforehand, with about 60 people (ISO 4120).',
+      ];
+  return { headline, sentences, reach };
+}
+

@@ -1,0 +1,71 @@
+import type { SessionRow } from '../sessions/find';
+import { count, listWords, sayP, showPercent } from './format';
+import type { CountsView, ProfileView, SeatView, TriangleView } from './types';
+
+/** Fewest trained panelists that a profile is usually scored by. */
+const PROFILE_PANEL = 8;
+
+/** From this many tested lines on, a single one that stands out is called exploratory. */
+const MANY_LINES = 5;
+
+/** Below this the panel's mean is poorly reproducible (a rough rule of thumb for ICC). */
+const LOW_ICC = 0.5;
+
+const seatWords = (numbers: readonly number[]) => `${numbers.length === 1 ? 'seat' : 'seats'} ${listWords(numbers)}`;
+
+function missingWarning(profile: ProfileView): string[] {
+  const lines = profile.lines.filter((line) => line.leftOut.length > 0);
+  if (lines.length === 0) return [];
+  const left = [...new Set(lines.flatMap((line) => line.leftOut))].sort((a, b) => a - b);
+  return [`Scores are missing (${seatWords(left)}; ${count(lines.length, 'line')}). Each line is tested with the panelists who scored every glass on it; the others’ scores on that line are kept, not counted in its means.`];
+}
+
+function agreementWarnings(profile: ProfileView): string[] {
+  const low = profile.lines.filter((line) => line.product && ((line.icc !== null && line.icc < LOW_ICC) || (line.kendallP !== null && line.kendallP > profile.alpha)));
+  const shownButLow = low.filter((line) => line.product!.p <= profile.alpha);
+  const disagree = profile.lines.filter((line) => line.interaction && line.interaction.p <= profile.alpha);
+  const warnings: string[] = [];
+  if (low.length > 0) warnings.push(`Low agreement in ${listWords(low.map((line) => line.name.toLowerCase()))} (Kendall’s W or ICC).${shownButLow.length > 0 ? ` Read ${listWords(shownButLow.map((line) => line.name.toLowerCase()))} with care.` : ''}`);
+  if (disagree.length > 0) warnings.push(`Panelists differ in how they see ${listWords(disagree.map((line) => `${line.name.toLowerCase()} (${sayP(line.interaction!.p)})`))}: the panelist × sample interaction is larger than their repeats explain. The tests allow for it.`);
+  return warnings;
+}
+
+/** The assumptions and weak points that travel with a profile's results. */
+export function profileWarnings(profile: ProfileView): string[] {
+  const tested = profile.lines.filter((line) => line.product !== null);
+  const fewest = Math.min(...tested.map((line) => line.assessors));
+  const warnings: string[] = [];
+  if (tested.length > 0 && fewest < PROFILE_PANEL) warnings.push(`${count(fewest, 'panelist')} only: profiles are usually scored by 8 to 12 trained panelists, and fewer show large differences only.`);
+  warnings.push(...missingWarning(profile));
+  if (profile.replicates === 1) warnings.push('One replicate: the panelist × sample interaction can’t be told from error, and there is no repeatability. Samples are judged by the two together.');
+  warnings.push(...agreementWarnings(profile));
+  if (tested.length >= MANY_LINES) {
+    warnings.push(`${tested.length} lines were tested, each at ${showPercent(profile.alpha)}: with no difference at all about ${(tested.length * profile.alpha).toFixed(1)} of them would still seem to show one. A single line that stands out is exploratory until it is tasted again.`);
+  }
+  return warnings;
+}
+
+/** The assumptions and weak points that travel with a triangle test. */
+export function triangleWarnings(triangle: TriangleView): string[] {
+  const warnings: string[] = [];
+  if (triangle.n > 0 && triangle.n < triangle.neededForHalf) {
+    warnings.push(`${count(triangle.n, 'answer')} can show only a gross difference: ${triangle.neededForHalf} show one that half of the people taste (${showPercent(triangle.alpha)} and 20 % risk).`);
+  }
+  if (triangle.unanswered > 0) warnings.push(`${count(triangle.unanswered, 'set')} unanswered: not counted as right or wrong.`);
+  if (triangle.n > 0 && triangle.n % 6 !== 0) warnings.push('The six orders did not come equally often, so a leaning to one place is not wholly evened out.');
+  if (triangle.sets > 1) warnings.push('Several sets by one person: the test of a difference stays valid, a claim of likeness would not (ISO 10399, note to 6.2, by analogy).');
+  return warnings;
+}
+
+/** What concerns every method: early openings, late answers, seats that are missing. */
+export function commonWarnings(session: SessionRow, counts: CountsView, seats: readonly SeatView[], granted: number): string[] {
+  const warnings: string[] = [];
+  if (granted > 0) warnings.push(`The key was opened early (${granted === 1 ? 'once' : `${granted} times`}). See “How was it run?”.`);
+  if (session.state === 'abandoned') warnings.push(`The session was given up after unsealing: ${session.abandonReason ?? 'no reason kept'}.`);
+  if (counts.late > 0) warnings.push(`${count(counts.late, 'answer')} came after close: set aside, shown below, never counted.`);
+  const nose = seats.filter((seat) => seat.role === 'nose_only').map((seat) => seat.number);
+  if (nose.length > 0) warnings.push(`Nose only: ${seatWords(nose)}.`);
+  if (counts.seatsSilent.length > 0) warnings.push(`Joined and answered nothing: ${seatWords(counts.seatsSilent)}.`);
+  if (counts.seatsLeft.length > 0) warnings.push(`Left before the end: ${seatWords(counts.seatsLeft)}. What they had answered counts where it is whole.`);
+  return warnings;
+}
