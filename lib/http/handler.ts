@@ -43,7 +43,8 @@ export function writeHandler<Schema extends z.ZodType, Context>(
         const issue = parsed.error.issues[0];
         throw new AppError('invalid', `${issue?.path.join('.') || 'body'}: ${issue?.message ?? 'not valid'}`);
       }
-      return NextResponse.json(await run(parsed.data, request, context), { headers: NO_STORE });
+      const result = await run(parsed.data, request, context);
+      return result instanceof Response ? result : NextResponse.json(result, { headers: NO_STORE });
     } catch (error) {
       return errorResponse(error);
     }
