@@ -1,0 +1,43 @@
+'use client';
+
+import dynamic from 'next/dynamic';
+import { useState } from 'react';
+import { Marker } from './marker';
+import type { RadarSeries } from './radar-chart';
+
+/** More lines than this can't be told apart on one radar. */
+const AT_ONCE = 6;
+
+const RadarChart = dynamic(() => import('./radar-chart'), { ssr: false, loading: () => <p className="note" role="status">Drawing the chart. The table holds the same numbers.</p> });
+
+export interface LegendSeries extends RadarSeries {
+  note: string;
+}
+
+/** The radar with its legend; with more than six samples the legend chooses which are drawn. */
+export function ProfileRadar({ axes, series }: { axes: string[]; series: LegendSeries[] }) {
+  const [drawn, setDrawn] = useState(() => series.slice(0, AT_ONCE).map((s) => s.sample));
+  const mayChoose = series.length > AT_ONCE;
+  const toggle = (sample: number) => setDrawn((now) => (now.includes(sample) ? now.filter((s) => s !== sample) : [...now, sample]));
+  const name = (s: LegendSeries) => <><Marker style={s.style} /><b>{s.label}</b> <span className="soft">{s.note}</span></>;
+  return (
+    <figure className="stack tight">
+      <div style={{ height: 320, maxWidth: 420, width: '100%' }}><RadarChart axes={axes} series={series.filter((s) => drawn.includes(s.sample))} /></div>
+      <figcaption>
+        {mayChoose && <p className="note">At most {AT_ONCE} at once: choose which.</p>}
+        <ul className="stack tight" aria-label="Samples">
+          {series.map((s) => (
+            <li key={s.sample}>
+              {mayChoose ? (
+                <label className="tick-row">
+                  <input type="checkbox" checked={drawn.includes(s.sample)} disabled={!drawn.includes(s.sample) && drawn.length >= AT_ONCE} onChange={() => toggle(s.sample)} />
+                  <span className="row wrap">{name(s)}</span>
+                </label>
+              ) : <span className="row wrap">{name(s)}</span>}
+            </li>
+          ))}
+        </ul>
+      </figcaption>
+    </figure>
+  );
+}

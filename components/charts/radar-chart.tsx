@@ -1,0 +1,72 @@
+'use client';
+
+import { Chart as ChartJs, Filler, LineElement, PointElement, RadialLinearScale, type ChartOptions, type PointStyle } from 'chart.js';
+import { useSyncExternalStore } from 'react';
+import { Radar } from 'react-chartjs-2';
+import type { SampleStyle, Shape } from './styles';
+
+ChartJs.register(RadialLinearScale, PointElement, LineElement, Filler);
+
+export interface RadarSeries {
+  sample: number;
+  label: string;
+  style: SampleStyle;
+  values: (number | null)[];
+}
+
+const POINTS: Record<Shape, PointStyle> = { circle: 'circle', square: 'rect', triangle: 'triangle', diamond: 'rectRot', cross: 'crossRot', bar: 'dash' };
+
+/** Tells when the light of the screen changes, so that the canvas takes the other colours. */
+function subscribeMode(onChange: () => void): () => void {
+  const observer = new MutationObserver(onChange);
+  observer.observe(document.documentElement, { attributes: true, attributeFilter: ['data-mode'] });
+  return () => observer.disconnect();
+}
+
+const readMode = () => document.documentElement.dataset.mode ?? 'paper';
+
+/** Values of tokens in the present light: a canvas can't take `var()`. */
+function tokenReader(): (name: string) => string {
+  const computed = getComputedStyle(document.documentElement);
+  return (name) => computed.getPropertyValue(name).trim();
+}
+
+/** Breaks a long name into lines of at most two words. */
+const inLines = (name: string): string | string[] => {
+  const words = name.split(' ');
+  return words.length < 3 ? name : [words.slice(0, 2).join(' '), words.slice(2).join(' ')];
+};
+
+/** Top of the scale: the twenty above the highest mean. */
+const topOf = (series: readonly RadarSeries[]) => Math.min(100, 20 * Math.ceil((Math.max(20, ...series.flatMap((s) => s.values.map((v) => v ?? 0))) + 1) / 20));
+
+/** Mean profiles on a radar. Drawn in the browser only; the table beside holds the same numbers. */
+export default function RadarChart({ axes, series }: { axes: string[]; series: RadarSeries[] }) {
+  const mode = useSyncExternalStore(subscribeMode, readMode, () => 'paper');
+  const token = tokenReader();
+  const font = { family: getComputedStyle(document.body).fontFamily, size: 13 };
+  const options: ChartOptions<'radar'> = {
+    animation: false,
+    maintainAspectRatio: false,
+    layout: { padding: 4 },
+    plugins: { legend: { display: false }, tooltip: { enabled: false } },
+    scales: {
+      r: {
+        min: 0,
+        max: topOf(series),
+        grid: { color: token('--rule') },
+        angleLines: { color: token('--rule') },
+        pointLabels: { color: token('--ink'), font },
+        ticks: { stepSize: 20, color: token('--ink-2'), backdropColor: token('--ground'), font: { ...font, size: 12 } },
+      },
+    },
+  };
+  const datasets = series.map(({ label, style, values }) => {
+    const colour = token(style.colour);
+    return {
+      label, data: values, borderColor: colour, borderDash: style.dash, borderWidth: 2, fill: false, spanGaps: false, pointStyle: POINTS[style.shape],
+      pointBackgroundColor: style.isHollow ? token('--ground') : colour, pointBorderColor: colour, pointBorderWidth: style.isHollow || style.shape === 'cross' || style.shape === 'bar' ? 2 : 1, pointRadius: 4,
+    };
+  });
+  return <Radar key={mode} data={{ labels: axes.map(inLines), datasets }} options={options} role="img" aria-label={`Mean profiles of ${series.map((s) => s.label).join(', ')}. The table holds the same numbers.`} />;
+}

@@ -1,0 +1,63 @@
+import { IntervalPlot, PlotAxis } from '@/components/charts/interval-plot';
+import { Marker } from '@/components/charts/marker';
+import type { SampleStyle } from '@/components/charts/styles';
+import { PHASE_WORDS, shortName, showP, showScore } from '@/lib/results/format';
+import type { LineView, SampleView } from '@/lib/results/types';
+
+interface Props {
+  lines: LineView[];
+  samples: SampleView[];
+  styles: Map<number, SampleStyle>;
+  alpha: number;
+}
+
+function Row({ line, samples, styles, alpha }: { line: LineView } & Omit<Props, 'lines'>) {
+  const isShown = line.product !== null && line.product.p <= alpha;
+  const cellOf = (sample: number) => line.cells.find((cell) => cell.sample === sample);
+  return (
+    <tr>
+      <th scope="row"><span className="mid">{line.name}</span> <span className="hint">{PHASE_WORDS[line.phase]}</span></th>
+      <td className="plot"><IntervalPlot intervals={line.cells} styles={styles} isDim={!isShown} /></td>
+      {samples.map((sample) => {
+        const cell = cellOf(sample.sample);
+        return (
+          <td key={sample.sample} className="num" data-label={shortName(sample)}>
+            {cell ? <>{showScore(cell.mean)} <span className={isShown ? 'let' : 'dim'} style={{ display: 'inline-block', minWidth: '1.3em', textAlign: 'left' }}>{cell.letters}</span></> : <span className="hint">none</span>}
+          </td>
+        );
+      })}
+      {line.product ? (
+        <>
+          <td className={`num ${isShown ? '' : 'hint'}`} data-label="p">{showP(line.product.p)}</td>
+          <td className="num soft" data-label="could show">{showScore(line.smallestDifference!)}</td>
+        </>
+      ) : <td colSpan={2} className="soft">{line.whyNot}</td>}
+    </tr>
+  );
+}
+
+/** Means, letters, intervals and p of each line of the ballot. */
+export function LineTable(props: Props) {
+  const { lines, samples, styles } = props;
+  return (
+    <div className="scroll-x" tabIndex={0} role="region" aria-label="Means by descriptor">
+      <table className="ledger folds">
+        <caption>Mean scores from 0 to 100. Samples that share a letter were not shown to differ.</caption>
+        <thead>
+          <tr>
+            <th scope="col">Descriptor</th>
+            <th scope="col"><PlotAxis /><span className="visually-hidden">Interval</span></th>
+            {samples.map((sample) => (
+              <th scope="col" key={sample.sample} className="num">
+                <span className="row" style={{ justifyContent: 'flex-end', gap: 4 }}><Marker style={styles.get(sample.sample)!} /><b>{shortName(sample)}</b></span>
+              </th>
+            ))}
+            <th scope="col" className="num"><i>p</i></th>
+            <th scope="col" className="num">could show</th>
+          </tr>
+        </thead>
+        <tbody>{lines.map((line) => <Row key={line.item} line={line} {...props} />)}</tbody>
+      </table>
+    </div>
+  );
+}
