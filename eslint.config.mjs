@@ -6,7 +6,7 @@ import nextTs from 'eslint-config-next/typescript';
 const forbid = (folders, message) => ({
   'no-restricted-imports': [
     'error',
-    { patterns: folders.map((folder) => ({ group: [`@/${folder}`, `@/${folder}/**`, `**/../${folder}/**`], message })) },
+    { patterns: folders.map((folder) => ({ group: [`@/${folder}`, `@/${folder}/**`, `**/../${folder}/**`, '!@/db/enums'], message })) },
   ],
 });
 

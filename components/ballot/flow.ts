@@ -1,0 +1,58 @@
+import { PHASES, type Phase } from '@/db/enums';
+import type { Sheet, SheetItem } from '@/lib/ballots/types';
+import { scoreKey, type Answer } from '@/lib/offline/answers';
+import type { Place } from '@/lib/offline/types';
+
+/** The lines that this seat scores: a nose-only taster gets look and nose. */
+export const linesOf = (sheet: Sheet): SheetItem[] =>
+  sheet.seatRole === 'nose_only' ? sheet.items.filter((item) => item.phase === 'look' || item.phase === 'nose') : sheet.items;
+
+/** The parts of one glass in the order in which it is tasted. */
+export function phasesOf(sheet: Sheet): Phase[] {
+  const used = new Set(linesOf(sheet).map((item) => item.phase));
+  return PHASES.filter((phase) => used.has(phase));
+}
+
+export const firstPlace = (sheet: Sheet): Place => ({
+  view: 'glass', block: sheet.blocks[0]!.block, position: 1, phase: sheet.method === 'profile' ? phasesOf(sheet)[0]! : null, restUntil: null,
+});
+
+/** The glass after this one: in the block, then in the next; null after the last. */
+export function nextGlass(sheet: Sheet, place: Place): { block: number; position: number } | null {
+  const index = sheet.blocks.findIndex((block) => block.block === place.block);
+  if (place.position < sheet.blocks[index]!.glasses.length) return { block: place.block, position: place.position + 1 };
+  const next = sheet.blocks[index + 1];
+  return next ? { block: next.block, position: 1 } : null;
+}
+
+/** The first glass of the block after this one (triangle: the next set); null after the last. */
+export function nextBlock(sheet: Sheet, block: number): number | null {
+  const index = sheet.blocks.findIndex((candidate) => candidate.block === block);
+  return sheet.blocks[index + 1]?.block ?? null;
+}
+
+export const codeAt = (sheet: Sheet, block: number, position: number): string =>
+  sheet.blocks.find((candidate) => candidate.block === block)!.glasses[position - 1]!.code;
+
+export interface Gap {
+  block: number;
+  position: number;
+  code: string;
+  phase: Phase;
+  missing: number;
+}
+
+/** Where lines are still untouched, glass by glass and part by part. */
+export function gapsOf(sheet: Sheet, answers: ReadonlyMap<string, Answer>): Gap[] {
+  const gaps: Gap[] = [];
+  const lines = linesOf(sheet).filter((item) => item.kind === 'line');
+  for (const { block, glasses } of sheet.blocks) {
+    for (const { position, code } of glasses) {
+      for (const phase of phasesOf(sheet)) {
+        const missing = lines.filter((line) => line.phase === phase && answers.get(scoreKey(block, position, line.item))?.op?.kind !== 'score').length;
+        if (missing > 0) gaps.push({ block, position, code, phase, missing });
+      }
+    }
+  }
+  return gaps;
+}
