@@ -1,12 +1,9 @@
-/** Before the first request: the newest schema, then the demo cellar into an empty database. */
+/**
+ * Runs once before the first request: checks the settings, brings the database to the newest
+ * schema, fills the demo. A server that failed at it must not stay up answering errors.
+ */
 export async function register(): Promise<void> {
   if (process.env.NEXT_RUNTIME !== 'nodejs') return;
-  try {
-    const { prepare } = await import('./lib/prepare');
-    await prepare();
-  } catch (error) {
-    console.error('Tercet could not start:', error instanceof Error ? error.message : error);
-    // Next would stay up and answer 500 to everything.
-    process.exit(1);
-  }
+  const { startUp } = await import('@/lib/setup/start-up');
+  await startUp();
 }
