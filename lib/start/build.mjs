@@ -11,6 +11,7 @@ const FILES = ['instrumentation.ts', 'next.config.mjs', 'package-lock.json', 'po
 const STAMP = path.join(ROOT, '.next/sources.sha256');
 
 function* filesUnder(folder) {
+  if (!existsSync(folder)) return;
   for (const entry of readdirSync(folder, { withFileTypes: true }).sort((a, b) => (a.name < b.name ? -1 : 1))) {
     const file = path.join(folder, entry.name);
     if (entry.isDirectory()) yield* filesUnder(file);
