@@ -1,14 +1,21 @@
+import { mkdtempSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import path from 'node:path';
 import { defineConfig, devices } from '@playwright/test';
 
 const port = Number(process.env.E2E_PORT ?? 3217);
 const baseURL = `http://127.0.0.1:${port}`;
+
+// Workers load this file too and inherit the name, so that tests find the demo's sign-ins.
+process.env.E2E_FOLDER ??= mkdtempSync(path.join(tmpdir(), 'tercet-e2e-'));
 
 export default defineConfig({
   testDir: './tests/e2e',
   fullyParallel: false,
   workers: 1,
   timeout: 120_000,
-  reporter: [['list']],
+  forbidOnly: true,
+  reporter: process.env.TERCET_REPORT ? [['list'], ['json', { outputFile: process.env.TERCET_REPORT }]] : [['list']],
   use: {
     ...devices['Desktop Chrome'],
     baseURL,
@@ -18,10 +25,11 @@ export default defineConfig({
     },
   },
   webServer: {
-    command: 'node tests/support/e2e-server.mjs',
+    command: 'exec node tests/support/e2e-server.mjs',
     url: `${baseURL}/api/health`,
     timeout: 120_000,
     reuseExistingServer: false,
-    env: { PORT: String(port) },
+    gracefulShutdown: { signal: 'SIGTERM', timeout: 5_000 },
+    env: { PORT: String(port), E2E_FOLDER: process.env.E2E_FOLDER },
   },
 });
