@@ -129,7 +129,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: Props) {
       <footer className="foot-bar">
         {active && activeValue !== null && !isClosed && <FineSteps name={active.name} value={activeValue} onStep={(value) => set(active.item, value)} onClear={() => clear(active.item)} />}
         <div className="acts">
-          {backWord ? <button type="button" className="btn" onClick={onBack}>{backWord}</button> : <span />}
+          {backWord && <button type="button" className="btn" onClick={onBack}>{backWord}</button>}
           <button type="button" className="btn btn-main" onClick={onNext}>{nextWord}</button>
         </div>
       </footer>
