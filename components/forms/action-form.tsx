@@ -24,6 +24,8 @@ interface Props<Schema extends z.ZodObject> {
   /** Said after a save that stays on the page. */
   saved?: string;
   className?: string;
+  /** Stands in for the main button (a guarded one). */
+  submitButton?: (isPending: boolean) => ReactNode;
   children: (fields: Fields, form: { id: string }) => ReactNode;
 }
 
@@ -32,7 +34,7 @@ interface Props<Schema extends z.ZodObject> {
  * typing with it, keeps what was typed on an error, and moves the focus to a summary that links to
  * the fields.
  */
-export function ActionForm<Schema extends z.ZodObject>({ action, schema, defaults, submit, working = 'Saving…', extra, saved, className, children }: Props<Schema>) {
+export function ActionForm<Schema extends z.ZodObject>({ action, schema, defaults, submit, working = 'Saving…', extra, saved, className, submitButton, children }: Props<Schema>) {
   const [result, dispatch, isPending] = useActionState(action, null);
   const [form, fields] = useForm<Record<string, unknown>>({
     lastResult: result,
@@ -62,7 +64,7 @@ export function ActionForm<Schema extends z.ZodObject>({ action, schema, default
         {wasSaved && saved && <p className="saved" tabIndex={-1} ref={said} role="status">{saved}</p>}
         {children(fields as unknown as Fields, { id: form.id })}
         <div className="row wrap">
-          <button className="btn btn-main" disabled={isPending}>{isPending ? working : submit}</button>
+          {submitButton ? submitButton(isPending) : <button className="btn btn-main" disabled={isPending}>{isPending ? working : submit}</button>}
           {extra}
         </div>
       </form>

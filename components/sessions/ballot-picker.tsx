@@ -1,0 +1,68 @@
+'use client';
+
+import { useState } from 'react';
+import type { FieldMetadata } from '@conform-to/react';
+import { TicksField } from '@/components/forms/fields';
+import type { DesignChoices } from '@/lib/sessions/types';
+
+const initial = (field: FieldMetadata<unknown>): Set<string> =>
+  new Set(Array.isArray(field.initialValue) ? (field.initialValue as string[]) : field.initialValue ? [String(field.initialValue)] : []);
+
+interface Props {
+  lines: FieldMetadata<unknown>;
+  flags: FieldMetadata<unknown>;
+  choices: DesignChoices;
+}
+
+/** Descriptors of the cellar's lexicon, by family; an aroma can be asked for in the nose, on the palate, or both. */
+export function BallotPicker({ lines, flags, choices }: Props) {
+  const [filter, setFilter] = useState('');
+  const [chosen, setChosen] = useState(() => initial(lines));
+  const word = filter.trim().toLowerCase();
+  const toggle = (value: string) =>
+    setChosen((before) => {
+      const after = new Set(before);
+      if (!after.delete(value)) after.add(value);
+      return after;
+    });
+  return (
+    <section className="stack">
+      <h2>The ballot</h2>
+      <fieldset className="field" id={lines.id}>
+        <legend>Lines to score, none to very strong</legend>
+        <p className="note">Six to twelve are enough for a glass. {chosen.size} chosen.</p>
+        {lines.errors && <p className="error">{lines.errors.join(' ')}</p>}
+        <input className="input" type="search" placeholder="Find a descriptor" aria-label="Find a descriptor" value={filter} onChange={(event) => setFilter(event.target.value)} />
+        {choices.lexicon.map(({ family, entries }) => {
+          const inFamily = entries.filter((entry) => chosen.has(entry.value) || chosen.has(palateOf(entry.value))).length;
+          const isShown = word === '' || family.toLowerCase().includes(word) || entries.some((entry) => entry.label.toLowerCase().includes(word));
+          return (
+            <details key={family} open={word !== '' || inFamily > 0} hidden={!isShown}>
+              <summary className="row" style={{ minHeight: 'var(--touch-desk)' }}>{family} {inFamily > 0 && <b>{inFamily}</b>}</summary>
+              <div className="grid-fields">
+                {entries.map((entry) => (
+                  <div key={entry.value} hidden={word !== '' && !entry.label.toLowerCase().includes(word) && !family.toLowerCase().includes(word)}>
+                    <Tick name={lines.name} value={entry.value} label={entry.label} note={entry.phase} isChosen={chosen.has(entry.value)} onToggle={toggle} />
+                    {entry.phase === 'nose' && <Tick name={lines.name} value={palateOf(entry.value)} label={entry.label} note="palate" isChosen={chosen.has(palateOf(entry.value))} onToggle={toggle} />}
+                  </div>
+                ))}
+              </div>
+            </details>
+          );
+        })}
+      </fieldset>
+      <TicksField field={flags} label="Faults to tick when noticed" options={choices.faults} />
+    </section>
+  );
+}
+
+const palateOf = (line: string): string => `${line.slice(0, 36)}:palate`;
+
+function Tick({ name, value, label, note, isChosen, onToggle }: { name: string; value: string; label: string; note: string; isChosen: boolean; onToggle(value: string): void }) {
+  return (
+    <label className="tick-row">
+      <input type="checkbox" name={name} value={value} checked={isChosen} onChange={() => onToggle(value)} />
+      <span>{label} <span className="hint">{note}</span></span>
+    </label>
+  );
+}
