@@ -18,13 +18,13 @@ export function CallsTable({ cellar, calls, sort, hrefOf }: { cellar: string; ca
   return (
     <table className="ledger folds">
       <thead>
-        <tr><th scope="col">{head('next', 'Next date')}</th><th scope="col">{head('barrel', 'Barrel')}</th><th scope="col">Call</th><th scope="col">Reasons</th><th scope="col">{head('decided', 'Decided')}</th><th scope="col">Where it stands</th></tr>
+        <tr><th scope="col" className="whitespace-nowrap">{head('next', 'Next date')}</th><th scope="col">{head('barrel', 'Barrel')}</th><th scope="col">Call</th><th scope="col">Reasons</th><th scope="col">{head('decided', 'Decided')}</th><th scope="col">Where it stands</th></tr>
       </thead>
       <tbody>
         {calls.map((call) => (
           <tr key={call.id}>
-            <td data-label="Next date">{call.nextDay ? showCalendarDay(call.nextDay) : <span className="hint">none</span>}</td>
-            <td data-label="Barrel"><Link href={`/c/${cellar}/barrels/${call.vessel.id}`}><b>{call.vessel.name}</b></Link> <span className="soft">{call.lot.code}</span></td>
+            <td data-label="Next date" className="whitespace-nowrap">{call.nextDay ? showCalendarDay(call.nextDay) : <span className="hint">none</span>}</td>
+            <td data-label="Barrel" className="whitespace-nowrap"><Link href={`/c/${cellar}/barrels/${call.vessel.id}`}><b>{call.vessel.name}</b></Link> <span className="soft">{call.lot.code}</span></td>
             <td data-label="Call"><Link className="mid" href={`/c/${cellar}/calls/${call.id}`}>{CALL_WORDS[call.kind]}</Link></td>
             <td data-label="Reasons">{call.reasons.length > 120 ? `${call.reasons.slice(0, 118)}…` : call.reasons}</td>
             <td data-label="Decided" className="soft">{call.decidedOn}, {call.decidedBy}</td>

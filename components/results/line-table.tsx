@@ -1,4 +1,4 @@
-import { IntervalPlot, PlotAxis } from '@/components/charts/interval-plot';
+import { IntervalPlot, PlotAxis, rangeOf, type Range } from '@/components/charts/interval-plot';
 import { Marker } from '@/components/charts/marker';
 import type { SampleStyle } from '@/components/charts/styles';
 import { PHASE_WORDS, shortName, showP, showScore } from '@/lib/results/format';
@@ -11,25 +11,25 @@ interface Props {
   alpha: number;
 }
 
-function Row({ line, samples, styles, alpha }: { line: LineView } & Omit<Props, 'lines'>) {
+function Row({ line, range, samples, styles, alpha }: { line: LineView; range: Range } & Omit<Props, 'lines'>) {
   const isShown = line.product !== null && line.product.p <= alpha;
   const cellOf = (sample: number) => line.cells.find((cell) => cell.sample === sample);
   return (
     <tr>
       <th scope="row"><span className="mid">{line.name}</span> <span className="hint">{PHASE_WORDS[line.phase]}</span></th>
-      <td className="plot"><IntervalPlot intervals={line.cells} styles={styles} isDim={!isShown} /></td>
+      <td><div className="md:hidden"><PlotAxis range={range} /></div><IntervalPlot intervals={line.cells} range={range} styles={styles} isDim={!isShown} /></td>
       {samples.map((sample) => {
         const cell = cellOf(sample.sample);
         return (
-          <td key={sample.sample} className="num" data-label={shortName(sample)}>
+          <td key={sample.sample} className="num max-md:inline-block max-md:mr-4" data-label={shortName(sample)}>
             {cell ? <>{showScore(cell.mean)} <span className={isShown ? 'let' : 'dim'} style={{ display: 'inline-block', minWidth: '1.3em', textAlign: 'left' }}>{cell.letters}</span></> : <span className="hint">none</span>}
           </td>
         );
       })}
       {line.product ? (
         <>
-          <td className={`num ${isShown ? '' : 'hint'}`} data-label="p">{showP(line.product.p)}</td>
-          <td className="num soft" data-label="could show">{showScore(line.smallestDifference!)}</td>
+          <td className={`num max-md:inline-block max-md:mr-4 ${isShown ? '' : 'hint'}`} data-label="p">{showP(line.product.p)}</td>
+          <td className="num soft max-md:inline-block" data-label="could show">{showScore(line.smallestDifference!)}</td>
         </>
       ) : <td colSpan={2} className="soft">{line.whyNot}</td>}
     </tr>
@@ -39,14 +39,15 @@ function Row({ line, samples, styles, alpha }: { line: LineView } & Omit<Props, 
 /** Means, letters, intervals and p of each line of the ballot. */
 export function LineTable(props: Props) {
   const { lines, samples, styles } = props;
+  const range = rangeOf(lines.flatMap((line) => line.cells));
   return (
     <div className="scroll-x" tabIndex={0} role="region" aria-label="Means by descriptor">
-      <table className="ledger folds">
-        <caption>Mean scores from 0 to 100. Samples that share a letter were not shown to differ.</caption>
+      <p className="soft pb-2" id="means-are">Mean scores from 0 to 100. Samples that share a letter were not shown to differ.</p>
+      <table className="ledger folds" aria-describedby="means-are">
         <thead>
           <tr>
             <th scope="col">Descriptor</th>
-            <th scope="col"><PlotAxis /><span className="visually-hidden">Interval</span></th>
+            <th scope="col"><PlotAxis range={range} /><span className="visually-hidden">Interval</span></th>
             {samples.map((sample) => (
               <th scope="col" key={sample.sample} className="num">
                 <span className="row" style={{ justifyContent: 'flex-end', gap: 4 }}><Marker style={styles.get(sample.sample)!} /><b>{shortName(sample)}</b></span>
@@ -56,7 +57,7 @@ export function LineTable(props: Props) {
             <th scope="col" className="num">could show</th>
           </tr>
         </thead>
-        <tbody>{lines.map((line) => <Row key={line.item} line={line} {...props} />)}</tbody>
+        <tbody>{lines.map((line) => <Row key={line.item} line={line} range={range} {...props} />)}</tbody>
       </table>
     </div>
   );

@@ -11,9 +11,9 @@ function Row({ person, lines }: { person: PanelistView; lines: number }) {
     <tr>
       <th scope="row"><b>{person.seat}</b> {person.name && <span className="soft">{person.name}</span>}</th>
       <td><span className={`row ${isWarned ? 'warn' : 'soft'}`}><Ring state={RINGS[person.word]} size={14} />{person.word}</span></td>
-      <td className="num" data-label="Repeats within, points:">{figure(person.repeatability, 1)}</td>
-      <td className="num" data-label="Agrees with the rest, r:">{figure(person.agreement, 2)}</td>
-      <td className="num" data-label="Tells samples apart, lines:">{person.discriminated === null ? <span className="hint">–</span> : `${person.discriminated} of ${lines}`}</td>
+      <td className="num max-md:inline-block max-md:mr-4" data-label="Repeats within, points:">{figure(person.repeatability, 1)}</td>
+      <td className="num max-md:inline-block max-md:mr-4" data-label="Agrees with the rest, r:">{figure(person.agreement, 2)}</td>
+      <td className="num max-md:inline-block max-md:mr-4" data-label="Tells samples apart, lines:">{person.discriminated === null ? <span className="hint">–</span> : `${person.discriminated} of ${lines}`}</td>
       <td data-label="Clearest line:" className="soft">{person.bestF ? `${person.bestF.line}, F ${person.bestF.F.toFixed(1)}` : ''}</td>
     </tr>
   );

@@ -20,11 +20,12 @@ export function ProfileFound({ profile, samples, styles }: { profile: ProfileVie
     sample: sample.sample, label: shortName(sample), note: note(sample), style: styles.get(sample.sample)!,
     values: scored.map((line) => line.cells.find((cell) => cell.sample === sample.sample)?.mean ?? null),
   }));
+  const isWide = samples.length > BESIDE;
   if (scored.length === 0) return <p>Nobody scored a glass, so there is nothing to show.</p>;
   return (
     <div className="stack">
-      <div className={samples.length <= BESIDE ? 'ev' : 'stack'}>
-        {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} />}
+      <div className={isWide ? 'stack' : 'ev'}>
+        {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} />}
         <LineTable lines={profile.lines} samples={samples} styles={styles} alpha={profile.alpha} />
       </div>
       <Statistics profile={profile} />

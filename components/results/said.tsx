@@ -11,23 +11,25 @@ interface Props {
 
 function Faults({ said, samples }: Omit<Props, 'styles'>) {
   return (
-    <table className="ledger folds">
-      <caption>Faults noted, out of the glasses that were answered.</caption>
-      <thead>
-        <tr><th scope="col">Fault</th>{samples.map((sample) => <th scope="col" className="num" key={sample.sample}>{shortName(sample)}</th>)}</tr>
-      </thead>
-      <tbody>
-        {said.faults.map((fault) => (
-          <tr key={fault.name}>
-            <th scope="row">{fault.name}</th>
-            {samples.map((sample) => {
-              const c = fault.counts.find((entry) => entry.sample === sample.sample);
-              return <td key={sample.sample} className={`num ${c && c.noted > 0 ? 'mid' : 'hint'}`} data-label={`${shortName(sample)}:`}>{c ? `${c.noted} of ${c.of}` : ''}</td>;
-            })}
-          </tr>
-        ))}
-      </tbody>
-    </table>
+    <div>
+      <p className="soft pb-2" id="faults-are">Faults noted, out of the glasses that were answered.</p>
+      <table className="ledger folds" aria-describedby="faults-are">
+        <thead>
+          <tr><th scope="col">Fault</th>{samples.map((sample) => <th scope="col" className="num" key={sample.sample}>{shortName(sample)}</th>)}</tr>
+        </thead>
+        <tbody>
+          {said.faults.map((fault) => (
+            <tr key={fault.name}>
+              <th scope="row">{fault.name}</th>
+              {samples.map((sample) => {
+                const c = fault.counts.find((entry) => entry.sample === sample.sample);
+                return <td key={sample.sample} className={`num max-md:inline-block max-md:mr-4 ${c && c.noted > 0 ? 'mid' : 'hint'}`} data-label={`${shortName(sample)}:`}>{c ? `${c.noted} of ${c.of}` : ''}</td>;
+              })}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }
 

@@ -40,7 +40,7 @@ export function SamplesTable({ samples, profile, styles, barrels, callHref }: Pr
       <tbody>
         {samples.map((sample) => (
           <tr key={sample.sample}>
-            <th scope="row"><span className="row"><Marker style={styles.get(sample.sample)!} /><b>{sample.label}</b>{sample.isControl && <span className="soft">control</span>}</span></th>
+            <th scope="row"><span className="row" style={{ whiteSpace: 'nowrap' }}><Marker style={styles.get(sample.sample)!} /><b>{sample.label}</b>{sample.isControl && <span className="soft">control</span>}</span></th>
             <td>
               {sample.components.length === 0 ? <span className="soft">from outside the cellar</span> : <ul>{sample.components.map((part) => <Part key={part.fillId + part.pulledOn} part={part} barrels={barrels} isWhole={sample.components.length === 1} />)}</ul>}
             </td>
@@ -50,7 +50,7 @@ export function SamplesTable({ samples, profile, styles, barrels, callHref }: Pr
                 <td data-label="Less than others:">{words(marks(sample.sample)?.lowest)}</td>
               </>
             )}
-            {callHref && <td className="num">{sample.components.length > 0 && <Link href={callHref(sample)} aria-label={`Record the call on ${sample.label}`}>Record the call</Link>}</td>}
+            {callHref && <td className="num" style={{ whiteSpace: 'nowrap' }}>{sample.components.length > 0 && <Link href={callHref(sample)} aria-label={`Record the call on ${sample.label}`}>Record the call</Link>}</td>}
           </tr>
         ))}
       </tbody>

@@ -7,33 +7,37 @@ const limit = (share: number) => (share <= 0 ? '0 %' : showPercent(share));
 function Numbers({ triangle }: { triangle: TriangleView }) {
   const { n, correct, p, minimumCorrect: needed, pd } = triangle;
   return (
-    <table className="ledger folds">
-      <caption>Exact binomial test, one-sided, chance 1/3.</caption>
-      <thead><tr><th scope="col">Answers</th><th scope="col" className="num">Correct</th><th scope="col" className="num">Needed</th><th scope="col" className="num"><i>p</i></th><th scope="col" className="num">Distinguishers (95 % exact limits)</th></tr></thead>
-      <tbody>
-        <tr>
-          <td data-label="Answers:">{n}</td>
-          <td className="num" data-label="Correct:">{correct}</td>
-          <td className="num" data-label="Needed:">{needed ?? 'none would do'}</td>
-          <td className="num" data-label="p:">{p === null ? '–' : showP(p)}</td>
-          <td className="num" data-label="Distinguishers:">{pd ? `${limit(pd.value)} (${limit(pd.lower)} to ${limit(pd.upper)})` : '–'}</td>
-        </tr>
-      </tbody>
-    </table>
+    <div>
+      <p className="soft pb-2" id="test-is">Exact binomial test, one-sided, chance 1/3.</p>
+      <table className="ledger folds" aria-describedby="test-is">
+        <thead><tr><th scope="col">Answers</th><th scope="col" className="num">Correct</th><th scope="col" className="num">Needed</th><th scope="col" className="num"><i>p</i></th><th scope="col" className="num">Distinguishers (95 % exact limits)</th></tr></thead>
+        <tbody>
+          <tr>
+            <td data-label="Answers:">{n}</td>
+            <td className="num" data-label="Correct:">{correct}</td>
+            <td className="num" data-label="Needed:">{needed ?? 'none would do'}</td>
+            <td className="num" data-label="p:">{p === null ? '–' : showP(p)}</td>
+            <td className="num" data-label="Distinguishers:">{pd ? `${limit(pd.value)} (${limit(pd.lower)} to ${limit(pd.upper)})` : '–'}</td>
+          </tr>
+        </tbody>
+      </table>
+    </div>
   );
 }
 
 function Power({ triangle }: { triangle: TriangleView }) {
   return (
-    <table className="ledger folds">
-      <caption>What so many answers would have shown (power at {showPercent(triangle.alpha)}).</caption>
-      <thead><tr><th scope="col">If this share of people tasted it</th><th scope="col" className="num">chance that it would have been shown</th></tr></thead>
-      <tbody>
-        {triangle.power.map((point) => (
-          <tr key={point.pd}><td data-label="If">{showPercent(point.pd)}</td><td className="num" data-label="chance">{showPercent(point.power)}</td></tr>
-        ))}
-      </tbody>
-    </table>
+    <div>
+      <p className="soft pb-2" id="power-is">What so many answers would have shown (power at {showPercent(triangle.alpha)}).</p>
+      <table className="ledger folds" aria-describedby="power-is">
+        <thead><tr><th scope="col">If this share of people tasted it</th><th scope="col" className="num">chance that it would have been shown</th></tr></thead>
+        <tbody>
+          {triangle.power.map((point) => (
+            <tr key={point.pd}><td data-label="If">{showPercent(point.pd)}</td><td className="num" data-label="chance">{showPercent(point.power)}</td></tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }
 
@@ -41,7 +45,7 @@ function Power({ triangle }: { triangle: TriangleView }) {
 export function TriangleResult({ triangle }: { triangle: TriangleView }) {
   if (triangle.whyNot) return <p>{triangle.whyNot}</p>;
   return (
-    <div className="stack">
+    <div className="stack" style={{ maxWidth: 640 }}>
       <CorrectPlot n={triangle.n} correct={triangle.correct} needed={triangle.minimumCorrect} />
       <Numbers triangle={triangle} />
       <Power triangle={triangle} />
@@ -53,16 +57,19 @@ export function TriangleResult({ triangle }: { triangle: TriangleView }) {
 export function TriangleSeats({ triangle }: { triangle: TriangleView }) {
   const word = (isCorrect: boolean | null, isGuess: boolean) => (isCorrect === null ? 'no answer' : `${isCorrect ? 'found it' : 'another glass'}${isGuess ? ', guessed' : ''}`);
   return (
-    <table className="ledger folds">
-      <thead><tr><th scope="col">Seat</th>{Array.from({ length: triangle.sets }, (_, i) => <th scope="col" key={i}>Set {i + 1}</th>)}</tr></thead>
-      <tbody>
-        {triangle.bySeat.map((seat) => (
-          <tr key={seat.seat}>
-            <th scope="row"><b>{seat.seat}</b> {seat.name && <span className="soft">{seat.name}</span>}</th>
-            {seat.sets.map((set) => <td key={set.set} data-label={`Set ${set.set}:`} className={set.isCorrect === null ? 'hint' : ''}>{word(set.isCorrect, set.isGuess)}</td>)}
-          </tr>
-        ))}
-      </tbody>
-    </table>
+    <div className="stack" style={{ maxWidth: 640 }}>
+      <p className="text-16">The answer rests on the count. {triangle.sets === 1 ? 'One set' : 'So few sets'} can’t say of one person whether he or she tastes the difference.</p>
+      <table className="ledger folds">
+        <thead><tr><th scope="col">Seat</th>{Array.from({ length: triangle.sets }, (_, i) => <th scope="col" key={i}>Set {i + 1}</th>)}</tr></thead>
+        <tbody>
+          {triangle.bySeat.map((seat) => (
+            <tr key={seat.seat}>
+              <th scope="row"><b>{seat.seat}</b> {seat.name && <span className="soft">{seat.name}</span>}</th>
+              {seat.sets.map((set) => <td key={set.set} data-label={`Set ${set.set}:`} className={set.isCorrect === null ? 'hint' : ''}>{word(set.isCorrect, set.isGuess)}</td>)}
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </div>
   );
 }

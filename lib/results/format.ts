@@ -9,7 +9,7 @@ export const sayP = (p: number): string => (p < 0.001 ? 'p < 0.001' : `p = ${p.t
 
 export const showScore = (value: number): string => value.toFixed(1);
 
-export const showPercent = (share: number): string => `${Math.round(share * 100)} %`;
+export const showPercent = (share: number): string => `${Math.round(share * 100)}\u00a0%`;
 
 /** "12", "12 and 31", "12, 31 and 47". */
 export function listWords(words: readonly (string | number)[], last = 'and'): string {

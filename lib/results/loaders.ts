@@ -72,7 +72,7 @@ function assemble(db: Tx | Db, access: Access, session: SessionRow): ResultsView
       abandonReason: session.abandonReason, unsealedOn: showMoment(session.unsealedAt!, timeZone), leader: frame.leader,
     },
     verdict: profile ? profileVerdict(profile, samples) : triangleVerdict(triangle!),
-    warnings: [...commonWarnings(session, counts, seatViews, granted), ...(profile ? profileWarnings(profile) : triangleWarnings(triangle!))],
+    warnings: [...commonWarnings(session, counts, seatViews, samples, granted), ...(profile ? profileWarnings(profile) : triangleWarnings(triangle!))],
     samples, seats: seatViews, counts, profile, triangle,
     said: gatherSaid({ answers, glasses, seats, items, samples: numbers, blockWord: methodOf(session.method).blockWord }),
     earlyOpenings: early,

@@ -1,16 +1,12 @@
-import type { SampleView } from './types';
 import { count, listWords, sayP, shortName, showPercent } from './format';
 import { wereShownToDiffer } from './profile-line';
-import type { CellView, LineView, ProfileView, TriangleView, VerdictView } from './types';
+import type { CellView, LineView, ProfileView, SampleView, TriangleView, VerdictView } from './types';
 
 type Names = ReadonlyMap<number, string>;
 
 const namesOf = (samples: readonly SampleView[]): Names => new Map(samples.map((sample) => [sample.sample, shortName(sample)]));
 
 const lower = (name: string) => name.charAt(0).toLowerCase() + name.slice(1);
-
-/** "Barrel 31" at the head of a sentence, for a barrel known by its number; else the sample's label. */
-const headName = (samples: readonly SampleView[], sample: number) => samples.find((s) => s.sample === sample)?.label ?? '';
 
 interface Standing {
   line: LineView;
@@ -39,23 +35,27 @@ function aloneSentences(standings: readonly Standing[], samples: readonly Sample
   });
 }
 
-/** Lines on which nothing stands alone: the highest, and what it was shown to lie above. */
-function pairSentence(line: LineView, names: Names, samples: readonly SampleView[]): string {
-  const sorted = [...line.cells].sort((a, b) => b.mean - a.mean);
-  const top = sorted.find((cell) => line.cells.some((other) => other.mean < cell.mean && wereShownToDiffer(cell, other)))!;
-  const under = sorted.filter((cell) => cell.mean < top.mean && wereShownToDiffer(cell, top)).map((cell) => names.get(cell.sample)!);
-  return `${line.name}: ${lower(headName(samples, top.sample))} was scored higher than ${listWords(under)}; ${samples.length > under.length + 1 ? 'its distance to the others was not shown' : 'no more was shown'}.`;
+/** Lines on which nothing stands alone, by the highest sample: what it was shown to lie above. */
+function pairSentences(lines: readonly LineView[], samples: readonly SampleView[]): string[] {
+  const names = namesOf(samples);
+  const byTop = new Map<number, string[]>();
+  for (const line of lines) {
+    const sorted = [...line.cells].sort((a, b) => b.mean - a.mean);
+    const under = (cell: CellView) => sorted.filter((other) => other.mean < cell.mean && wereShownToDiffer(cell, other));
+    const top = sorted.find((cell) => under(cell).length > 0)!;
+    byTop.set(top.sample, [...(byTop.get(top.sample) ?? []), `above ${listWords(under(top).map((cell) => names.get(cell.sample)!))} in ${lower(line.name)}`]);
+  }
+  return samples.flatMap(({ sample, label }) => (byTop.has(sample) ? [`${label} stands ${listWords(byTop.get(sample)!)}.`] : []));
 }
 
 function shownSentences(shown: readonly LineView[], samples: readonly SampleView[]): string[] {
-  const names = namesOf(samples);
   const standings = shown.filter(hasPair).map(standingOf);
   // Of two samples the higher one says it all.
   const sided = samples.length === 2 ? standings.map((s) => ({ ...s, aloneLow: null })) : standings;
   const open = standings.filter((s) => s.aloneHigh === null && s.aloneLow === null);
   return [
     ...aloneSentences(sided, samples),
-    ...open.map((s) => pairSentence(s.line, names, samples)),
+    ...pairSentences(open.map((s) => s.line), samples),
     ...shown.filter((line) => !hasPair(line)).map((line) => `${line.name}: a difference was shown over all (${sayP(line.product!.p)}), but not for any single pair.`),
   ];
 }
@@ -106,8 +106,9 @@ export function triangleVerdict(triangle: TriangleView): VerdictView {
   if (p === null || pd === null) return { headline: 'Nothing could be tested.', sentences: [triangle.whyNot ?? ''], reach: [] };
   const headline = `${isShown ? 'A difference was shown' : 'No difference was shown'}: ${correct} of ${n} found the odd glass.`;
   const needed = least === null ? `With ${count(n, 'answer')} no number correct would have been enough at ${showPercent(alpha)}.` : `${least} of ${n} were needed at ${showPercent(alpha)} risk.`;
-  const sentences = [`${needed} Guessing alone gives ${correct} or more with ${sayP(p)}.`, limitsWords(pd)];
-  if (triangle.guesses > 0) sentences.push(`${triangle.guesses} of ${n} said that they guessed; ${triangle.correctGuesses} of those ${triangle.correctGuesses === 1 ? 'was' : 'were'} right.`);
+  const sentences = [`${needed} Guessing alone gives ${correct} or more with ${sayP(p)}.`];
+  const beside = [limitsWords(pd)];
+  if (triangle.guesses > 0) beside.push(`${triangle.guesses} of ${n} said that they guessed; ${triangle.correctGuesses === 0 ? 'none' : triangle.correctGuesses} of those ${triangle.correctGuesses < 2 ? 'was' : 'were'} right.`);
   const half = triangle.power.find((point) => point.pd === 0.3);
   const reach = isShown
     ? ['It says that the two differ, not in what, nor which is better: a paired test or a profile answers that.', 'It speaks of these two pulls, on that day, to this panel.']
@@ -115,6 +116,6 @@ export function triangleVerdict(triangle: TriangleView): VerdictView {
         `Not shown is not alike: had ${showPercent(half!.pd)} of people tasted a difference, this test would have shown it with a chance of ${showPercent(half!.power)}.`,
         'To claim likeness, plan a test for it beforehand, with about 60 people (ISO 4120).',
       ];
-  return { headline, sentences, reach };
+  return { headline, sentences, reach: [...beside, ...reach] };
 }
 

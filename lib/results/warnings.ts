@@ -1,6 +1,6 @@
 import type { SessionRow } from '../sessions/find';
 import { count, listWords, sayP, showPercent } from './format';
-import type { CountsView, ProfileView, SeatView, TriangleView } from './types';
+import type { CountsView, ProfileView, SampleView, SeatView, TriangleView } from './types';
 
 /** Fewest trained panelists that a profile is usually scored by. */
 const PROFILE_PANEL = 8;
@@ -57,9 +57,15 @@ export function triangleWarnings(triangle: TriangleView): string[] {
   return warnings;
 }
 
+/** Samples that were not drawn on one day differ in how long they stood, too. */
+function pullWarning(samples: readonly SampleView[]): string[] {
+  const days = [...new Set(samples.flatMap((sample) => sample.components.map((part) => part.pulledOn)))];
+  return days.length > 1 ? [`The samples were pulled on ${days.length} different days: part of a difference may come of that.`] : [];
+}
+
 /** What concerns every method: early openings, late answers, seats that are missing. */
-export function commonWarnings(session: SessionRow, counts: CountsView, seats: readonly SeatView[], granted: number): string[] {
-  const warnings: string[] = [];
+export function commonWarnings(session: SessionRow, counts: CountsView, seats: readonly SeatView[], samples: readonly SampleView[], granted: number): string[] {
+  const warnings: string[] = pullWarning(samples);
   if (granted > 0) warnings.push(`The key was opened early (${granted === 1 ? 'once' : `${granted} times`}). See “How was it run?”.`);
   if (session.state === 'abandoned') warnings.push(`The session was given up after unsealing: ${session.abandonReason ?? 'no reason kept'}.`);
   if (counts.late > 0) warnings.push(`${count(counts.late, 'answer')} came after close: set aside, shown below, never counted.`);
