@@ -1,0 +1,85 @@
+import 'server-only';
+import { getDb } from '@/db/client';
+import { loadAccess, type Access } from '../auth/access';
+import { readKeyForPouring, type PouringKey } from '../blind/read-key';
+import { asAppError } from '../errors';
+import { seatLabel } from '../seats/format';
+import { findSession } from '../sessions/find';
+import { showMoment } from '../time';
+import { now } from '../clock';
+
+export interface PourSheet {
+  title: string;
+  pourer: string;
+  serving: string;
+  printedAt: string;
+  commitment: string;
+  isTriangle: boolean;
+  /** One to a bottle (profile: a code for each sample and block) or to a sample (triangle: all its glasses). */
+  bottles: { block: number; code: string | null; label: string; glasses: number; volumeMl: number; codes: string[] }[];
+  blocks: { block: number; rows: { seat: string; glasses: { code: string; label: string }[] }[] }[];
+}
+
+function bottlesOf(key: PouringKey, isTriangle: boolean, servingMl: number): PourSheet['bottles'] {
+  const label = new Map(key.samples.map((sample) => [sample.sample, sample.label]));
+  const groups = new Map<string, PouringKey['servings']>();
+  for (const serving of key.servings) {
+    const name = isTriangle ? `${serving.sample}` : `${serving.block}/${serving.code}`;
+    groups.set(name, [...(groups.get(name) ?? []), serving]);
+  }
+  return [...groups.values()]
+    .map((servings) => ({
+      block: isTriangle ? 0 : servings[0]!.block,
+      code: isTriangle ? null : servings[0]!.code,
+      label: label.get(servings[0]!.sample)!,
+      glasses: servings.length,
+      volumeMl: (servings.length + 1) * servingMl,
+      codes: servings.map((serving) => serving.code).sort(),
+    }))
+    .sort((a, b) => a.block - b.block || a.label.localeCompare(b.label, 'en', { numeric: true }));
+}
+
+/**
+ * The pour sheet for a named pourer; `refusal` says why for anybody else.
+ * @throws AppError `not_found`
+ */
+export async function loadPourSheet(slug: string, sessionId: string): Promise<{ access: Access; sheet: PourSheet | null; refusal: string | null; title: string }> {
+  const access = await loadAccess(slug, 'session.list');
+  const session = findSession(getDb(), access.cellar.id, sessionId);
+  let key: PouringKey;
+  try {
+    key = readKeyForPouring(access, sessionId);
+  } catch (error) {
+    const known = asAppError(error);
+    if (known?.code !== 'forbidden') throw error;
+    return { access, sheet: null, refusal: known.message, title: session.title };
+  }
+  const isTriangle = key.method === 'triangle';
+  const label = new Map(key.samples.map((sample) => [sample.sample, sample.label]));
+  const seats = [...new Set(key.servings.map((serving) => serving.seat))].sort((a, b) => a - b);
+  const blocks = [...new Set(key.servings.map((serving) => serving.block))].sort((a, b) => a - b);
+  return {
+    access,
+    refusal: null,
+    title: session.title,
+    sheet: {
+      title: session.title,
+      pourer: access.user.name,
+      serving: [session.servingTemperatureC === null ? null : `${session.servingTemperatureC} °C`, `${session.servingVolumeMl} mL`, 'covered'].filter(Boolean).join(', '),
+      printedAt: showMoment(now(), access.cellar.timeZone),
+      commitment: key.commitment,
+      isTriangle,
+      bottles: bottlesOf(key, isTriangle, session.servingVolumeMl),
+      blocks: blocks.map((block) => ({
+        block,
+        rows: seats.map((seat) => ({
+          seat: seatLabel(seat, seat > session.seatsPlanned, session.seatsPlanned),
+          glasses: key.servings
+            .filter((serving) => serving.block === block && serving.seat === seat)
+            .sort((a, b) => a.position - b.position)
+            .map((serving) => ({ code: serving.code, label: label.get(serving.sample)! })),
+        })),
+      })),
+    },
+  };
+}
