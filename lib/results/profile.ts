@@ -35,13 +35,13 @@ function lineView(line: LineFact, numbers: LineNumbers): LineView {
 }
 
 /**
- * The lines on which a sample stands most above or below the others, only where it was shown to
- * differ from at least one; by distance from the mean of the samples in units of what could be shown.
+ * The lines on which a sample stands most above or below the others, only where the line showed a
+ * difference and the sample was shown to differ from at least one; by distance from the mean of the samples in units of what could be shown.
  */
-function extremesOf(sample: number, lines: readonly LineView[]): { sample: number; highest: string[]; lowest: string[] } {
+function extremesOf(sample: number, lines: readonly LineView[], alpha: number): { sample: number; highest: string[]; lowest: string[] } {
   const marked = lines.flatMap((line) => {
     const own = line.cells.find((cell) => cell.sample === sample);
-    if (!own || !line.smallestDifference || !line.cells.some((cell) => wereShownToDiffer(cell, own))) return [];
+    if (!own || !line.smallestDifference || line.product!.p > alpha || !line.cells.some((cell) => wereShownToDiffer(cell, own))) return [];
     const level = line.cells.reduce((sum, cell) => sum + cell.mean, 0) / line.cells.length;
     return [{ name: line.name, distance: (own.mean - level) / line.smallestDifference }];
   });
@@ -76,7 +76,7 @@ export function analyseProfile({ lines, scores, glasses, seats, samples, replica
     lines: views,
     replicates,
     alpha,
-    extremes: samples.map((sample) => extremesOf(sample, views)),
+    extremes: samples.map((sample) => extremesOf(sample, views, alpha)),
     panel: judgePanel(seats, named, alpha, steadiness),
   };
 }

@@ -1,5 +1,6 @@
 import type { SessionRow } from '../sessions/find';
 import { count, listWords, sayP, showPercent } from './format';
+import { wereShownToDiffer } from './profile-line';
 import type { CountsView, ProfileView, SampleView, SeatView, TriangleView } from './types';
 
 /** Fewest trained panelists that a profile is usually scored by. */
@@ -30,6 +31,12 @@ function agreementWarnings(profile: ProfileView): string[] {
   return warnings;
 }
 
+/** Tukey's rule and F rarely disagree; when they do, the line counts as not shown. */
+function splitWarning(profile: ProfileView): string[] {
+  const split = profile.lines.filter((line) => line.product && line.product.p > profile.alpha && line.cells.some((a) => line.cells.some((b) => wereShownToDiffer(a, b))));
+  return split.map((line) => `${line.name}: one pair passes Tukey’s rule although the F test over all samples shows nothing (${sayP(line.product!.p)}). It is counted as not shown.`);
+}
+
 /** The assumptions and weak points that travel with a profile's results. */
 export function profileWarnings(profile: ProfileView): string[] {
   const tested = profile.lines.filter((line) => line.product !== null);
@@ -38,7 +45,7 @@ export function profileWarnings(profile: ProfileView): string[] {
   if (tested.length > 0 && fewest < PROFILE_PANEL) warnings.push(`${count(fewest, 'panelist')} only: profiles are usually scored by 8 to 12 trained panelists, and fewer show large differences only.`);
   warnings.push(...missingWarning(profile));
   if (profile.replicates === 1) warnings.push('One replicate: the panelist × sample interaction can’t be told from error, and there is no repeatability. Samples are judged by the two together.');
-  warnings.push(...agreementWarnings(profile));
+  warnings.push(...agreementWarnings(profile), ...splitWarning(profile));
   if (tested.length >= MANY_LINES) {
     warnings.push(`${tested.length} lines were tested, each at ${showPercent(profile.alpha)}: with no difference at all about ${(tested.length * profile.alpha).toFixed(1)} of them would still seem to show one. A single line that stands out is exploratory until it is tasted again.`);
   }
