@@ -25,12 +25,15 @@ export interface PermutationOptions {
   seed?: number;
 }
 
+/** All orders of eight ranks fit; of nine they would fill the memory of a phone. */
+const MOST_ARRANGEMENTS = 50_000;
+
 /**
  * Exact permutation p of Friedman's test, given the mid-ranks each assessor gave (ties allowed).
  *
  * Under the hypothesis of no difference all arrangements of an assessor's own ranks are equally likely. The distribution of
  * the rank sums is built up assessor by assessor; as it does not change when products trade places, only sorted rank
- * sums are kept. Beyond `budget` steps (about 10 assessors x 5 products) seeded draws are used, p = (1 + hits)/(1 + draws).
+ * sums are kept. Beyond `budget` steps, or eight products, seeded draws are used, p = (1 + hits)/(1 + draws).
  *
  * @param matrix rows = assessors, columns = products; scores or ranks, no missing values.
  * @param options budget of steps (default 3e6), draws (default 20000), seed (default 1).
@@ -121,7 +124,7 @@ function spreadDistribution(rows: number[][], k: number, budget: number): Map<nu
     const key = rows[i].join();
     let arrangements = cache.get(key);
     if (arrangements === undefined) {
-      arrangements = distinctArrangements(rows[i], budget);
+      arrangements = distinctArrangements(rows[i], MOST_ARRANGEMENTS);
       cache.set(key, arrangements);
     }
     if (!arrangements) return null;

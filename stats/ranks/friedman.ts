@@ -1,5 +1,6 @@
 import { StatsError } from '../errors';
 import { chiSquareSf, fSf } from '../distributions';
+import { requireInteger } from '../check';
 import { rankBlocks, type RankedBlocks } from './midranks';
 
 /** Friedman's test of a complete block design and the quantities that go with it. */
@@ -73,6 +74,29 @@ export function friedmanOfRanks(ranked: RankedBlocks): FriedmanResult {
     kendallW: w,
     tieSum,
   };
+}
+
+/**
+ * Friedman's test when only the rank sums of a panel without ties are known, as printed tables give them.
+ *
+ * @param assessors whole number from 2. @param rankSums one for each product; together b k(k + 1)/2.
+ * @throws StatsError `not_integer`, `out_of_range` (sums that cannot come from that many assessors), `too_few`, `not_finite`.
+ */
+export function friedmanFromRankSums(assessors: number, rankSums: ReadonlyArray<number>): FriedmanResult {
+  requireInteger(assessors, 'The number of assessors', 2);
+  const k = rankSums.length;
+  if (k < 2) throw new StatsError('too_few', 'Ranking needs at least two products');
+  let total = 0;
+  for (const sum of rankSums) {
+    requireInteger(sum, 'Every rank sum', assessors, assessors * k);
+    total += sum;
+  }
+  if (total !== (assessors * k * (k + 1)) / 2) {
+    throw new StatsError('out_of_range', 'The rank sums do not add up for that many assessors and products');
+  }
+  const ranks = Float64Array.from({ length: k }, (_, j) => j + 1);
+  const squares = (assessors * k * (k + 1) * (2 * k + 1)) / 6;
+  return friedmanOfRanks({ blocks: assessors, treatments: k, ranks, rankSums: [...rankSums], tieSum: 0, squares });
 }
 
 /** Probability that b - 1 assessors all repeat the first one's arrangement of ranks by chance. */

@@ -33,7 +33,7 @@ function namedSet(c: CaseInput, load: (csv: string) => Table): Table {
   const table = caseRows(c, load);
   if (!table.columns.includes('set')) return table;
   const name = values(table, 'set')
-    .filter((set) => c.case.includes(set))
+    .filter((set) => c.case.toLowerCase().includes(set.toLowerCase().replaceAll('_', ' ')))
     .sort((a, b) => b.length - a.length)[0];
   return name === undefined ? table : { columns: table.columns, rows: table.rows.filter((row) => String(row.set) === name) };
 }

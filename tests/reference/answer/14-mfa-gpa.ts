@@ -11,8 +11,9 @@ function groupTables(c: CaseInput, load: (csv: string) => Table): number[][][] {
   const table = caseRows(c, load);
   const sizes = c.inputs.groups as readonly number[];
   const range = /columns (\d+) to (\d+)/.exec(String(c.inputs.how));
-  if (!range) return tablesByAssessor(table, c.inputs.group_names as string[], c.inputs.row_labels as string[], sizes[0]);
-  let from = Number(range[1]) - 1;
+  const long = (c.inputs.group_names as string[]).every((name) => table.rows.some((row) => Object.values(row).some((cell) => String(cell) === String(name))));
+  if (!range && long) return tablesByAssessor(table, c.inputs.group_names as string[], c.inputs.row_labels as string[], sizes[0]);
+  let from = range ? Number(range[1]) - 1 : table.columns.length - sizes.reduce((sum, size) => sum + size, 0);
   return sizes.map((size) => {
     const columns = table.columns.slice(from, from + size);
     from += size;
