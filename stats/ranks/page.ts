@@ -93,38 +93,44 @@ export function pageCriticalL(k: number, n: number, alpha: number): number | nul
 /** P(sum of place times doubled rank >= x) over all arrangements within the rows; null when too long to count. */
 function upperTail(rows: number[][], k: number): ((x: number) => number) | null {
   if (k > MOST_PRODUCTS_EXACT) return null;
+  const sorted = rows.map((row) => [...row].sort((a, b) => a - b));
+  const bounds = sorted.map((row) => ({
+    smallest: row.reduce((sum, r, j) => sum + r * (k - j), 0),
+    largest: row.reduce((sum, r, j) => sum + r * (j + 1), 0),
+  }));
+  let steps = 0;
+  let width = 1;
+  for (const { smallest, largest } of bounds) {
+    steps += width * (largest - smallest + 1);
+    width += largest - smallest;
+  }
+  if (steps > MOST_STEPS) return null;
   const kinds = new Map<string, Float64Array>();
   let low = 0;
   let total: Float64Array = Float64Array.of(1);
-  let steps = 0;
-  for (const row of rows) {
-    const sorted = [...row].sort((a, b) => a - b);
-    const smallest = sorted.reduce((sum, r, j) => sum + r * (k - j), 0);
-    const key = sorted.join();
+  sorted.forEach((row, i) => {
+    const key = row.join();
     let one = kinds.get(key);
     if (!one) {
-      one = blockDistribution(sorted, smallest);
+      one = blockDistribution(row, bounds[i].smallest, bounds[i].largest);
       kinds.set(key, one);
     }
-    steps += one.length * total.length;
-    if (steps > MOST_STEPS) return null;
     const grown = new Float64Array(total.length + one.length - 1);
     for (let j = 0; j < one.length; j += 1) {
       if (one[j] === 0) continue;
-      for (let i = 0; i < total.length; i += 1) grown[i + j] += total[i] * one[j];
+      for (let at = 0; at < total.length; at += 1) grown[at + j] += total[at] * one[j];
     }
     total = grown;
-    low += smallest;
-  }
+    low += bounds[i].smallest;
+  });
   const tail = new Float64Array(total.length + 1);
   for (let i = total.length - 1; i >= 0; i -= 1) tail[i] = tail[i + 1] + total[i];
   return (x) => (x <= low ? 1 : (tail[x - low] ?? 0));
 }
 
 /** Probabilities of sum of place times doubled rank for one assessor, from `smallest` up, place by place over subsets of ranks. */
-function blockDistribution(sorted: number[], smallest: number): Float64Array {
+function blockDistribution(sorted: number[], smallest: number, largest: number): Float64Array {
   const k = sorted.length;
-  const largest = sorted.reduce((sum, r, j) => sum + r * (j + 1), 0);
   const width = largest + 1;
   let level = new Map<number, Float64Array>([[0, Float64Array.of(1)]]);
   for (let place = 1; place <= k; place += 1) {
