@@ -21,7 +21,7 @@ function Row({ line, range, samples, styles, alpha }: { line: LineView; range: R
       {samples.map((sample) => {
         const cell = cellOf(sample.sample);
         return (
-          <td key={sample.sample} className="num max-md:inline-block max-md:mr-4" data-label={shortName(sample)}>
+          <td key={sample.sample} className="num whitespace-nowrap max-md:inline-block max-md:mr-4" data-label={shortName(sample)}>
             {cell ? <>{showScore(cell.mean)} <span className={isShown ? 'let' : 'dim'} style={{ display: 'inline-block', minWidth: '1.3em', textAlign: 'left' }}>{cell.letters}</span></> : <span className="hint">none</span>}
           </td>
         );

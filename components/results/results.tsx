@@ -26,16 +26,17 @@ interface Props {
 
 function FoundNote({ results }: { results: ResultsView }) {
   const { profile, triangle } = results;
+  const panelists = results.seats.filter((seat) => seat.answers > 0).length;
   if (profile) {
     return (
       <>
-        <span className="block">{count(results.seats.length, 'panelist')}, {count(profile.replicates, 'replicate')}, line 0 to 100.</span>
+        <span className="block">{count(panelists, 'panelist')}, {count(profile.replicates, 'replicate')}, line 0 to 100.</span>
         <span className="block pt-2">Same letter, or bars that overlap: no difference shown. Tukey, {Math.round(profile.alpha * 100)} %, over panelist × sample.</span>
         <span className="block pt-2">Could show: the smallest difference that this panel could have shown.</span>
       </>
     );
   }
-  return <>{count(triangle!.n, 'answer')} by {count(results.seats.length, 'panelist')}. Triangle test, exact binomial.</>;
+  return <>{count(triangle!.n, 'answer')} by {count(panelists, 'panelist')}. Triangle test, exact binomial.</>;
 }
 
 /** The results of an unsealed session, by the cellar's questions. */

@@ -10,6 +10,9 @@ const AGREEMENT_FLOOR = 0.4;
 /** A correlation as negative as this means that the line was read the other way round. */
 const REVERSED = -0.4;
 
+/** A panel of fewer says little, however well each one did. */
+const FEW = 5;
+
 /** Repeats that are wider than this many times the panel's median need a refresher. */
 const LOOSE = 2;
 
@@ -73,7 +76,7 @@ function wordFor(person: Omit<PanelistView, 'word'>, shown: number, usual: numbe
 const seatsWords = (people: readonly PanelistView[]) => `${people.length === 1 ? 'Seat' : 'Seats'} ${listWords(people.map((p) => p.seat))}`;
 
 function sentencesOf(people: readonly PanelistView[], shown: number, steadiness: string[]): string[] {
-  const sentences: string[] = [];
+  const sentences: string[] = people.length > 1 && people.length < FEW ? [`A panel of ${people.length} says little, however well each one did.`] : [];
   const repeats = people.flatMap((person) => person.repeatability ?? []);
   if (repeats.length > 0) sentences.push(`${repeats.length === 1 ? 'One panelist repeats' : `${repeats.length} panelists repeat`} within ${Math.ceil(Math.max(...repeats))} points.`);
   else if (people.length > 0) sentences.push('With one replicate nobody’s repeatability can be told.');
@@ -82,6 +85,13 @@ function sentencesOf(people: readonly PanelistView[], shown: number, steadiness:
   if (refreshers.length > 0) sentences.push(`${seatsWords(refreshers)} ${refreshers.length === 1 ? 'needs' : 'need'} a refresher.`);
   if (shown === 0) sentences.push('No line showed a difference, so agreement can’t be judged here.');
   return [...sentences, ...steadiness];
+}
+
+function headlineOf(panelists: number, refreshers: number, shown: number): string {
+  if (panelists < 2) return 'Too few panelists to judge.';
+  if (shown === 0) return 'Not judged.';
+  if (panelists < FEW || refreshers * 2 > panelists) return 'Read with care.';
+  return refreshers === 0 ? 'Enough to act on.' : 'Enough to act on, with a remark.';
 }
 
 /** For each panelist who needs a refresher: how many lines keep their answer without that seat. */
@@ -102,7 +112,5 @@ export function judgePanel(seats: readonly SeatFact[], lines: readonly NamedLine
     .map((person) => ({ seat: person.seat, ...steadiness(person.seat) }))
     .map(({ seat, kept, of }) => (kept === of ? `Without seat ${seat} the answer stays.` : `Without seat ${seat}, ${kept} of ${count(of, 'line')} keep their answer.`));
   const refreshers = panelists.filter((person) => person.word === 'needs a refresher').length;
-  const headline =
-    panelists.length < 2 ? 'Too few panelists to judge.' : shown === 0 ? 'Not judged.' : refreshers === 0 ? 'Enough to act on.' : refreshers * 2 > panelists.length ? 'Read with care.' : 'Enough to act on, with a remark.';
-  return { headline, sentences: sentencesOf(panelists, shown, steady), lines: lines.length, panelists };
+  return { headline: headlineOf(panelists.length, refreshers, shown), sentences: sentencesOf(panelists, shown, steady), lines: lines.length, panelists };
 }

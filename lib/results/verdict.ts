@@ -35,6 +35,11 @@ function aloneSentences(standings: readonly Standing[], samples: readonly Sample
   });
 }
 
+/** More names than this are counted instead. */
+const NAMED_AT_MOST = 4;
+
+const namesOrCount = (cells: readonly CellView[], names: Names) => (cells.length > NAMED_AT_MOST ? `${cells.length} of the others` : listWords(cells.map((cell) => names.get(cell.sample)!)));
+
 /** Lines on which nothing stands alone, by the highest sample: what it was shown to lie above. */
 function pairSentences(lines: readonly LineView[], samples: readonly SampleView[]): string[] {
   const names = namesOf(samples);
@@ -43,7 +48,7 @@ function pairSentences(lines: readonly LineView[], samples: readonly SampleView[
     const sorted = [...line.cells].sort((a, b) => b.mean - a.mean);
     const under = (cell: CellView) => sorted.filter((other) => other.mean < cell.mean && wereShownToDiffer(cell, other));
     const top = sorted.find((cell) => under(cell).length > 0)!;
-    byTop.set(top.sample, [...(byTop.get(top.sample) ?? []), `above ${listWords(under(top).map((cell) => names.get(cell.sample)!))} in ${lower(line.name)}`]);
+    byTop.set(top.sample, [...(byTop.get(top.sample) ?? []), `above ${namesOrCount(under(top), names)} in ${lower(line.name)}`]);
   }
   return samples.flatMap(({ sample, label }) => (byTop.has(sample) ? [`${label} stands ${listWords(byTop.get(sample)!)}.`] : []));
 }
