@@ -68,7 +68,7 @@ export function Results({ results, home, mayCall, maySeeBarrels, calls, cellar }
           {calls.length > 0 ? <CallsTable cellar={cellar} calls={calls} /> : <p className="soft">No call rests on this session yet.</p>}
         </LedgerRow>
       )}
-      <LedgerRow question="How was it run?"><Report items={results.report} /></LedgerRow>
+      <LedgerRow question="How was it run?" note={<a href={`/api/v1${home}/sessions/${session.id}/results`} download={`results-${session.id.slice(0, 8)}.json`}>All numbers as a file (JSON)</a>}><Report items={results.report} /></LedgerRow>
     </LedgerPage>
   );
 }
