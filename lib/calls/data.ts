@@ -1,10 +1,12 @@
 import 'server-only';
 import { getDb, type Db, type Tx } from '@/db/client';
 import { calls, fills, lots, sampleComponents, pulls, samples, sessions, users, vessels } from '@/db/schema';
+import type { VesselKind } from '@/db/enums';
 import { and, asc, desc, eq, isNull } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
 import type { Access } from '../auth/access';
 import { now } from '../clock';
+import { VESSEL_WORDS } from '../results/format';
 import { dayIn, showDay } from '../time';
 import type { CallStatus, CallView, FillOption } from './types';
 
@@ -15,7 +17,7 @@ function rowsOf(cellarId: string) {
     .select({
       id: calls.id, fillId: calls.fillId, kind: calls.kind, reasons: calls.reasons, nextDay: calls.nextDay, decidedAt: calls.decidedAt,
       withdrawnAt: calls.withdrawnAt, withdrawReason: calls.withdrawReason, toDay: fills.toDay,
-      decidedBy: users.name, withdrawnBy: withdrawers.name, vesselId: vessels.id, vesselName: vessels.name,
+      decidedBy: users.name, withdrawnBy: withdrawers.name, vesselId: vessels.id, vesselName: vessels.name, vesselKind: vessels.kind,
       lotId: lots.id, lotCode: lots.code, sessionId: sessions.id, sessionTitle: sessions.title,
     })
     .from(calls)
@@ -56,7 +58,7 @@ export function listCalls(access: Access): CallView[] {
     return {
       id: row.id, kind: row.kind, reasons: row.reasons, nextDay: row.nextDay, status,
       isDue: status === 'standing' && row.nextDay !== null && row.nextDay <= today,
-      vessel: { id: row.vesselId, name: row.vesselName },
+      vessel: { id: row.vesselId, name: row.vesselName, kind: row.vesselKind },
       lot: { id: row.lotId, code: row.lotCode },
       session: row.sessionId && row.sessionTitle ? { id: row.sessionId, title: row.sessionTitle } : null,
       decidedBy: row.decidedBy,
@@ -80,12 +82,12 @@ export const listStandingCalls = (access: Access): CallView[] =>
     .filter((call) => call.status === 'standing')
     .sort((a, b) => (a.nextDay ?? '9999').localeCompare(b.nextDay ?? '9999'));
 
-const label = (vessel: string, lot: string) => `Barrel ${vessel}, ${lot}`;
+const label = (row: { kind: VesselKind; vessel: string; lot: string }) => `${VESSEL_WORDS[row.kind]} ${row.vessel}, ${row.lot}`;
 
 /** What stands in the cellar's vessels now. */
 export function listPresentFills(access: Access): (FillOption & { vesselId: string })[] {
   return getDb()
-    .select({ fillId: fills.id, vesselId: vessels.id, vessel: vessels.name, lot: lots.code })
+    .select({ fillId: fills.id, vesselId: vessels.id, kind: vessels.kind, vessel: vessels.name, lot: lots.code })
     .from(fills)
     .innerJoin(vessels, eq(vessels.id, fills.vesselId))
     .innerJoin(lots, eq(lots.id, fills.lotId))
@@ -93,13 +95,13 @@ export function listPresentFills(access: Access): (FillOption & { vesselId: stri
     .orderBy(asc(vessels.name))
     .all()
     .sort((a, b) => a.vessel.localeCompare(b.vessel, 'en', { numeric: true }))
-    .map((row) => ({ fillId: row.fillId, vesselId: row.vesselId, label: label(row.vessel, row.lot) }));
+    .map((row) => ({ fillId: row.fillId, vesselId: row.vesselId, label: label(row) }));
 }
 
 /** The fills that the samples of a session were drawn from. */
 export function listFillsOfSession(db: Tx | Db, cellarId: string, sessionId: string): (FillOption & { sampleId: string; vesselId: string })[] {
   return db
-    .select({ fillId: fills.id, vesselId: vessels.id, vessel: vessels.name, lot: lots.code, sampleId: samples.id })
+    .select({ fillId: fills.id, vesselId: vessels.id, kind: vessels.kind, vessel: vessels.name, lot: lots.code, sampleId: samples.id })
     .from(samples)
     .innerJoin(sampleComponents, and(eq(sampleComponents.sampleId, samples.id), eq(sampleComponents.cellarId, samples.cellarId)))
     .innerJoin(pulls, eq(pulls.id, sampleComponents.pullId))
@@ -109,5 +111,5 @@ export function listFillsOfSession(db: Tx | Db, cellarId: string, sessionId: str
     .where(and(eq(samples.cellarId, cellarId), eq(samples.sessionId, sessionId)))
     .all()
     .sort((a, b) => a.vessel.localeCompare(b.vessel, 'en', { numeric: true }))
-    .map((row) => ({ fillId: row.fillId, vesselId: row.vesselId, sampleId: row.sampleId, label: label(row.vessel, row.lot) }));
+    .map((row) => ({ fillId: row.fillId, vesselId: row.vesselId, sampleId: row.sampleId, label: label(row) }));
 }

@@ -1,4 +1,4 @@
-import type { CallKind } from '@/db/enums';
+import type { CallKind, VesselKind } from '@/db/enums';
 
 /** `standing`: the newest one on a fill that is still in its vessel. An earlier one is `superseded`. */
 export type CallStatus = 'standing' | 'superseded' | 'emptied' | 'withdrawn';
@@ -13,7 +13,7 @@ export interface CallView {
   /** Whether it stands and its next day is here or past. */
   isDue: boolean;
   status: CallStatus;
-  vessel: { id: string; name: string };
+  vessel: { id: string; name: string; kind: VesselKind };
   lot: { id: string; code: string };
   session: { id: string; title: string } | null;
   decidedBy: string;

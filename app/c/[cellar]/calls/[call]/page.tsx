@@ -7,6 +7,7 @@ import { loadAccess } from '@/lib/auth/access';
 import { allows } from '@/lib/auth/permissions';
 import { CALL_CAUTIONS, CALL_WORDS, NEXT_DAY_WORDS } from '@/lib/calls/format';
 import { loadCall } from '@/lib/calls/loaders';
+import { VESSEL_WORDS } from '@/lib/results/format';
 import { showCalendarDay } from '@/lib/time';
 
 export const metadata: Metadata = { title: 'Call' };
@@ -20,13 +21,13 @@ export default async function CallPage({ params }: PageProps<'/c/[cellar]/calls/
   const mayCall = allows(access.roles, 'call.make');
   return (
     <LedgerPage>
-      <LedgerHead margin="Call" title={`${CALL_WORDS[call.kind]} barrel ${call.vessel.name}`} actions={<Link className="btn" href={`${home}/calls`}>All calls</Link>} />
+      <LedgerHead margin="Call" title={`${CALL_WORDS[call.kind]} ${VESSEL_WORDS[call.vessel.kind].toLowerCase()} ${call.vessel.name}`} actions={<Link className="btn" href={`${home}/calls`}>All calls</Link>} />
       <LedgerRow question="Why?"><p style={{ whiteSpace: 'pre-line', maxWidth: '70ch' }}>{call.reasons}</p></LedgerRow>
       <LedgerRow question="Where does it stand?">
         <dl className="facts">
           <dt>State</dt><dd><CallStatus call={call} /></dd>
           <dt>{NEXT_DAY_WORDS[call.kind]}</dt><dd>{call.nextDay ? showCalendarDay(call.nextDay) : 'no date'}</dd>
-          <dt>Barrel</dt><dd><Link href={`${home}/barrels/${call.vessel.id}`}>{call.vessel.name}</Link>, lot <Link href={`${home}/lots/${call.lot.id}`}>{call.lot.code}</Link></dd>
+          <dt>{VESSEL_WORDS[call.vessel.kind]}</dt><dd><Link href={`${home}/barrels/${call.vessel.id}`}>{call.vessel.name}</Link>, lot <Link href={`${home}/lots/${call.lot.id}`}>{call.lot.code}</Link></dd>
           <dt>Decided</dt><dd>{call.decidedOn} by {call.decidedBy}</dd>
           <dt>Evidence</dt><dd>{call.session ? <Link href={`${home}/sessions/${call.session.id}/results`}>{call.session.title}</Link> : 'no session: decided without a blind tasting'}</dd>
         </dl>
