@@ -2,11 +2,14 @@ import { defineConfig, globalIgnores } from 'eslint/config';
 import nextVitals from 'eslint-config-next/core-web-vitals';
 import nextTs from 'eslint-config-next/typescript';
 
-/** Forbids imports from the named top folders; the message says what to do instead. */
+/**
+ * Forbids imports from the named top folders; the message says what to do instead. The fixed
+ * vocabularies (db/enums) are pure and may be read anywhere.
+ */
 const forbid = (folders, message) => ({
   'no-restricted-imports': [
     'error',
-    { patterns: folders.map((folder) => ({ group: [`@/${folder}`, `@/${folder}/**`, `**/../${folder}/**`, '!@/db/enums'], message })) },
+    { patterns: folders.map((folder) => ({ regex: `^(@|(\\.\\./)+)/?${folder}(?!/enums$)(/|$)`, message })) },
   ],
 });
 
