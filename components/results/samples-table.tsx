@@ -1,7 +1,8 @@
 import Link from 'next/link';
 import { Marker } from '@/components/charts/marker';
 import type { SampleStyle } from '@/components/charts/styles';
-import { listWords, showPercent, VESSEL_WORDS, woodWords } from '@/lib/results/format';
+import { VESSEL_WORDS } from '@/lib/register/format';
+import { listWords, showPercent, woodWords } from '@/lib/results/format';
 import type { ComponentView, ProfileView, SampleView } from '@/lib/results/types';
 
 interface Props {

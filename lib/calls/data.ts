@@ -6,7 +6,7 @@ import { and, asc, desc, eq, isNull } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
 import type { Access } from '../auth/access';
 import { now } from '../clock';
-import { VESSEL_WORDS } from '../results/format';
+import { VESSEL_WORDS } from '../register/format';
 import { dayIn, showDay } from '../time';
 import type { CallStatus, CallView, FillOption } from './types';
 

@@ -1,4 +1,5 @@
-import type { DrawMethod, Method, Phase, Toast, VesselKind } from '@/db/enums';
+import type { DrawMethod, Method, Phase } from '@/db/enums';
+import { TOAST_WORDS, VESSEL_WORDS } from '../register/format';
 import type { ComponentView, SampleView } from './types';
 
 /** A p-value to three digits; below that it is "<0.001". */
@@ -23,10 +24,6 @@ export const count = (n: number, word: string): string => `${n} ${word}${n === 1
 export const METHOD_WORDS: Record<Method, string> = { profile: 'Profile on line scales (in the manner of ISO 13299)', triangle: 'Triangle test (in the manner of ISO 4120)' };
 
 export const PHASE_WORDS: Record<Phase, string> = { look: 'look', nose: 'nose', palate: 'palate', mouthfeel: 'mouthfeel', after: 'after' };
-
-export const TOAST_WORDS: Record<Toast, string> = { light: 'light toast', medium: 'medium toast', medium_plus: 'medium plus toast', heavy: 'heavy toast', none: 'not toasted' };
-
-export const VESSEL_WORDS: Record<VesselKind, string> = { barrel: 'Barrel', puncheon: 'Puncheon', demijohn: 'Demijohn', foudre: 'Foudre', tank: 'Tank', keg: 'Keg', amphora: 'Amphora' };
 
 export const DRAW_WORDS: Record<DrawMethod, string> = { thief: 'by thief', nail: 'at the nail', spigot: 'from the spigot' };
 

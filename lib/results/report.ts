@@ -1,10 +1,9 @@
-import type { Allergen } from '@/db/enums';
 import type { SessionRow } from '../sessions/find';
 import { showMoment } from '../time';
-import { count, DRAW_WORDS, listWords, METHOD_WORDS, showPercent, VESSEL_WORDS } from './format';
+import { VESSEL_WORDS } from '../register/format';
+import { ALLERGEN_WORDS } from '../seats/allergens';
+import { count, DRAW_WORDS, listWords, METHOD_WORDS, showPercent } from './format';
 import type { CountsView, EarlyOpeningView, ReportItem, SampleView } from './types';
-
-const ALLERGEN_WORDS: Record<Allergen, string> = { sulfites: 'sulfites', egg: 'egg', milk: 'milk', nuts: 'nuts', honey: 'honey', gluten: 'gluten (crackers)' };
 
 function identity(sample: SampleView): string {
   const parts = sample.components.map((c) => {

@@ -7,7 +7,7 @@ import { loadAccess } from '@/lib/auth/access';
 import { allows } from '@/lib/auth/permissions';
 import { CALL_CAUTIONS, CALL_WORDS, NEXT_DAY_WORDS } from '@/lib/calls/format';
 import { loadCall } from '@/lib/calls/loaders';
-import { VESSEL_WORDS } from '@/lib/results/format';
+import { VESSEL_WORDS } from '@/lib/register/format';
 import { showCalendarDay } from '@/lib/time';
 
 export const metadata: Metadata = { title: 'Call' };
