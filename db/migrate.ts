@@ -1,7 +1,7 @@
 import Database from 'better-sqlite3';
 import { drizzle } from 'drizzle-orm/better-sqlite3';
 import { migrate } from 'drizzle-orm/better-sqlite3/migrator';
-import { existsSync, mkdirSync, readFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, renameSync, rmSync } from 'node:fs';
 import path from 'node:path';
 
 /** Without these the promises about evidence are empty, so their presence is checked each time. */
@@ -30,19 +30,36 @@ function pendingMigrations(sqlite: Database.Database, folder: string): number {
   return journal.entries.length - done;
 }
 
+function requireNothingLost(sqlite: Database.Database, before: ReadonlyMap<string, number>, allowedLosses: readonly string[]): void {
+  const after = rowCounts(sqlite);
+  for (const [table, count] of before) {
+    if (!allowedLosses.includes(table) && (after.get(table) ?? 0) < count) {
+      throw new Error(`A migration lost rows of ${table}: ${count} before, ${after.get(table) ?? 0} after.`);
+    }
+  }
+  const broken = sqlite.pragma('foreign_key_check') as unknown[];
+  if (broken.length > 0) throw new Error(`A migration broke ${broken.length} references.`);
+  requireTriggers(sqlite);
+}
+
+/** Puts the copy in the place of the file, so that the next start doesn't go on with what was damaged. */
+function goBack(file: string, copy: string): void {
+  for (const end of ['', '-wal', '-shm']) rmSync(`${file}${end}`, { force: true });
+  renameSync(copy, file);
+}
+
 /**
  * Brings the file to the newest schema on a connection of its own with foreign keys off: a rebuilt
  * parent table would otherwise wipe its children inside the migrator's transaction, where turning
  * the keys off has no effect. A copy is made first; rows lost, broken references or missing
- * triggers afterwards are an error.
+ * triggers afterwards are an error, and the copy takes the file's place again.
  * @param allowedLosses tables that a migration is meant to empty or drop
  * @returns how many migrations ran
- * @throws Error that names the copy to go back to
  */
 export function migrateDatabase(file: string, folder = migrationsFolder(), allowedLosses: readonly string[] = []): number {
-  const isNew = !existsSync(file);
   mkdirSync(path.dirname(file), { recursive: true });
   const sqlite = new Database(file);
+  let copy: string | null = null;
   try {
     sqlite.pragma('journal_mode = WAL');
     sqlite.pragma('synchronous = FULL');
@@ -51,22 +68,21 @@ export function migrateDatabase(file: string, folder = migrationsFolder(), allow
       requireTriggers(sqlite);
       return 0;
     }
-    const copy = `${file}.before-${new Date().toISOString().replaceAll(/[:.]/g, '-')}`;
     const before = rowCounts(sqlite);
-    if (!isNew && before.size > 0) sqlite.prepare('VACUUM INTO ?').run(copy);
+    if (before.size > 0) {
+      const name = `${file}.before-${new Date().toISOString().replaceAll(/[:.]/g, '-')}`;
+      sqlite.prepare('VACUUM INTO ?').run(name);
+      copy = name;
+    }
     sqlite.pragma('foreign_keys = OFF');
     migrate(drizzle(sqlite), { migrationsFolder: folder });
-    const hint = isNew ? '' : ` The state before it was kept as ${copy}`;
-    const after = rowCounts(sqlite);
-    for (const [table, count] of before) {
-      if (!allowedLosses.includes(table) && (after.get(table) ?? 0) < count) {
-        throw new Error(`A migration lost rows of ${table}: ${count} before, ${after.get(table) ?? 0} after.${hint}`);
-      }
-    }
-    const broken = sqlite.pragma('foreign_key_check') as unknown[];
-    if (broken.length > 0) throw new Error(`A migration broke ${broken.length} references.${hint}`);
-    requireTriggers(sqlite);
+    requireNothingLost(sqlite, before, allowedLosses);
     return pending;
+  } catch (error) {
+    sqlite.close();
+    if (copy) goBack(file, copy);
+    const text = error instanceof Error ? error.message : String(error);
+    throw new Error(copy ? `${text} The database is as it was before.` : text, { cause: error });
   } finally {
     sqlite.close();
   }

@@ -30,6 +30,8 @@ await requireFreePort(port);
 await install();
 await build();
 say(existsSync(databaseFile) ? 'Starting.' : 'Starting, with a new database.');
+// Database, copies and files with sign-ins are for this user's eyes only.
+process.umask(0o077);
 const began = performance.now();
 const { ended } = await serve(port);
 say(`Ready in ${((performance.now() - began) / 1000).toFixed(1)} s.`);
