@@ -47,20 +47,22 @@ export function Board({ url, method, initial, cellar, sessionId }: Props) {
   const received = shown.reduce((sum, seat) => sum + seat.received, 0);
   const expected = shown.length * board.unitsPerSeat;
   const onPhones = shown.reduce((sum, seat) => sum + seat.onPhone, 0);
-  const waiting = shown.filter((seat) => whereOf(seat, method, board.unitsPerSeat).waits);
+  const waiting = shown.filter((seat) => seat.isClaimed && whereOf(seat, method, board.unitsPerSeat).waits);
+  const free = shown.filter((seat) => !seat.isClaimed).map((seat) => seat.label);
   return (
     <div className="stack">
       {error && <p className="caution" role="status">The board has lost the server; these figures may be old. Answers are safe on the phones.</p>}
       <div className="tally row"><b>{received}</b><span className="soft">of {expected} {many} received<br />{onPhones} answers on phones</span></div>
       <div className="progress" role="progressbar" aria-label={`${many} received`} aria-valuemin={0} aria-valuemax={expected} aria-valuenow={received}><span style={{ width: `${expected ? (100 * received) / expected : 0}%` }} /></div>
-      {waiting.length > 0 && (
+      {waiting.length + free.length > 0 && (
         <ul className="waits" aria-label="Who waits?">
+          {free.length > 0 && <li><Ring state="waits" size={16} /><span><b>{free.length === 1 ? 'Seat' : 'Seats'} {free.join(', ')}</b>: nobody has joined</span></li>}
           {waiting.map((seat) => (
-            <li key={seat.number}><Ring state="waits" size={16} /><span><b>Seat {seat.label}</b> {whereOf(seat, method, board.unitsPerSeat).text}{seat.isClaimed && `, ${ago(seat.silentS)}`}</span></li>
+            <li key={seat.number}><Ring state="waits" size={16} /><span><b>Seat {seat.label}</b> {whereOf(seat, method, board.unitsPerSeat).text}, {ago(seat.silentS)}</span></li>
           ))}
         </ul>
       )}
-      <table className="ledger folds">
+      <table className="ledger folds tight">
         <thead><tr><th className="num n">Seat</th><th>Name</th><th>Where</th><th>{many}</th><th className="num">Received</th><th className="num">On phone</th><th className="num">Last heard</th><th>Phone lost?</th></tr></thead>
         <tbody>
           {shown.map((seat) => {

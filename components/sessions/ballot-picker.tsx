@@ -38,7 +38,7 @@ export function BallotPicker({ lines, flags, choices }: Props) {
           const isShown = word === '' || family.toLowerCase().includes(word) || entries.some((entry) => entry.label.toLowerCase().includes(word));
           return (
             <details key={family} open={word !== '' || inFamily > 0} hidden={!isShown}>
-              <summary className="row" style={{ minHeight: 'var(--touch-desk)' }}>{family} {inFamily > 0 && <b>{inFamily}</b>}</summary>
+              <summary className="fold">{family} {inFamily > 0 && <b>{inFamily} chosen</b>}</summary>
               <div className="grid-fields">
                 {entries.map((entry) => (
                   <div key={entry.value} hidden={word !== '' && !entry.label.toLowerCase().includes(word) && !family.toLowerCase().includes(word)}>

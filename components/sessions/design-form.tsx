@@ -10,6 +10,7 @@ import { draftSchema } from '@/lib/sessions/schema';
 import type { DesignChoices } from '@/lib/sessions/types';
 import { BallotPicker } from './ballot-picker';
 import { Needs } from './needs';
+import { PullPicker } from './pull-picker';
 
 const METHODS = [
   { value: 'profile', label: 'Profile: what do they taste like, and how much of it?' },
@@ -49,7 +50,7 @@ export function DesignForm({ cellar, choices, defaults, sessionId, version }: Pr
           </section>
           <section className="stack">
             <h2>The samples</h2>
-            <TicksField field={fields.pulls!} label={isProfile ? 'Two to twelve pulls' : 'Two pulls'} hint="One sample for each. Which of them gets which code is drawn at sealing." options={choices.pulls} />
+            <PullPicker field={fields.pulls!} label={isProfile ? 'Two to twelve pulls' : 'Two pulls'} pulls={choices.pulls} />
             {choices.pulls.length === 0 && <p className="caution">No pull is recorded yet. Open a barrel and record one; it then stands here.</p>}
             <TextField field={fields.controlLabel!} label="A control from outside the cellar" hint="Its label only, if there is one." />
           </section>

@@ -15,8 +15,6 @@ export interface DemoCellar {
   userIds: Record<DemoPerson['key'], string>;
   /** The fill that each barrel holds now, by barrel. */
   fillOf: Map<string, string>;
-  /** The newest pull of each barrel that has one, by barrel. */
-  pullOf: Map<string, string>;
 }
 
 export function insertPeople(tx: Tx, passwordHashes: Record<DemoPerson['key'], string>, at: Date): { cellarId: string; userIds: DemoCellar['userIds'] } {
@@ -35,7 +33,7 @@ export function insertPeople(tx: Tx, passwordHashes: Record<DemoPerson['key'], s
 }
 
 /** Lots, barrels with their earlier and present fills, and months of pulls before `today`. */
-export function insertRegister(tx: Tx, cellarId: string, userIds: DemoCellar['userIds'], today: Date): Pick<DemoCellar, 'fillOf' | 'pullOf'> {
+export function insertRegister(tx: Tx, cellarId: string, userIds: DemoCellar['userIds'], today: Date): Pick<DemoCellar, 'fillOf'> {
   const daysAgo = (days: number) => new Date(today.getTime() - days * DAY_MS);
   const day = (days: number) => dayIn(daysAgo(days), ESTATE.timeZone);
   const year = Number(day(0).slice(0, 4));
@@ -50,7 +48,6 @@ export function insertRegister(tx: Tx, cellarId: string, userIds: DemoCellar['us
   }
 
   const fillOf = new Map<string, string>();
-  const pullOf = new Map<string, string>();
   demoBarrels().forEach((barrel, index) => {
     const vesselId = newId();
     const { yearsBack, lot, ...rest } = barrel;
@@ -75,10 +72,20 @@ export function insertRegister(tx: Tx, cellarId: string, userIds: DemoCellar['us
         isHissHeard: barrel.name === '41' ? ago > 90 : true, isResealed: true, isToppedUp: true, toppedWith: 'the same lot, keg 2', isWiped: true,
         note: barrel.name === '41' && ago < 90 ? 'No hiss at the bung; slight film.' : '', createdAt: at,
       }).run();
-      pullOf.set(barrel.name, id);
     }
   });
-  return { fillOf, pullOf };
+  return { fillOf };
+}
+
+/** One clean pull for a tasting. @returns its id */
+export function insertPull(tx: Tx, cellar: Pick<DemoCellar, 'cellarId' | 'userIds' | 'fillOf'>, barrel: string, pulledAt: Date): string {
+  const id = newId();
+  tx.insert(pulls).values({
+    id, cellarId: cellar.cellarId, fillId: cellar.fillOf.get(barrel)!, pulledAt, pulledBy: cellar.userIds.bram, drawMethod: 'thief', volumeMl: 700,
+    temperatureC: 13.2, isSanitised: true, evaporationS: 60, isVented: true, isHissHeard: true, isResealed: true, isToppedUp: true,
+    toppedWith: 'the same lot, keg 2', isWiped: true, createdAt: pulledAt,
+  }).run();
+  return id;
 }
 
 const TASTED_OFTEN = new Set(['5', '9', '10', '11', '12', '13', '18', '19', '31', '41', '47', '52', '62', '63', '64', '77']);

@@ -1,5 +1,5 @@
 import 'server-only';
-import { getDb } from '@/db/client';
+import { getDb, type Tx } from '@/db/client';
 import { calls, cellars, sessions } from '@/db/schema';
 import { eq } from 'drizzle-orm';
 import { randomBytes } from 'node:crypto';
@@ -7,11 +7,11 @@ import { mkdirSync, writeFileSync } from 'node:fs';
 import path from 'node:path';
 import { accessOf, type Access } from '../auth/access';
 import { hashPassword } from '../auth/password';
-import { atMoment } from '../clock';
+import { atMoment, now } from '../clock';
 import { newId } from '../ids';
 import { closeSession, openSession, sealSession, unsealSession } from '../sessions/lifecycle';
 import { dayIn } from '../time';
-import { DAY_MS, insertPeople, insertRegister, type DemoCellar } from './cellar';
+import { DAY_MS, insertPeople, insertPull, insertRegister, type DemoCellar } from './cellar';
 import { seeded } from './panel';
 import { ESTATE, PEOPLE, type DemoPerson } from './people';
 import { insertDraft, type DemoSession } from './sessions';
@@ -28,11 +28,13 @@ const HOUR_MS = 3_600_000;
 /** Ten in the morning of the day that many days before `today`, near enough for a demo. */
 const morning = (today: Date, daysAgo: number) => new Date(Math.floor((today.getTime() - daysAgo * DAY_MS) / DAY_MS) * DAY_MS + 9 * HOUR_MS);
 
-function draftOf(story: Story, cellar: DemoCellar, scheduledFor: Date): DemoSession {
+/** The session's samples are drawn two hours before it, all by one hand. */
+function draftOf(tx: Tx, story: Story, cellar: DemoCellar, scheduledFor: Date): DemoSession {
   const { barrels, ...rest } = story;
+  const drawnAt = new Date(Math.min(scheduledFor.getTime() - 2 * HOUR_MS, now().getTime() - 2 * HOUR_MS));
   return {
     ...rest,
-    samples: barrels.map((barrel) => ({ label: `Barrel ${barrel}`, pullId: cellar.pullOf.get(barrel)! })),
+    samples: barrels.map((barrel) => ({ label: `${barrel === '5' ? 'Puncheon' : 'Barrel'} ${barrel}`, pullId: insertPull(tx, cellar, barrel, drawnAt) })),
     scheduledFor,
     createdAt: new Date(scheduledFor.getTime() - DAY_MS),
   };
@@ -59,7 +61,7 @@ export async function fillDemo(today = new Date()): Promise<boolean> {
       return accessOf({ id: userIds[key], email: person.email, name: person.name, signInId: '' }, ESTATE.slug)!;
     };
     const leader = access('odo');
-    const draft = (story: Story, at: Date) => insertDraft(tx, cellarId, userIds.odo, userIds.bram, draftOf(story, cellar, at));
+    const draft = (story: Story, at: Date) => insertDraft(tx, cellarId, userIds.odo, userIds.bram, draftOf(tx, story, cellar, at));
     const sealAndOpen = (id: string, at: Date) => {
       atMoment(new Date(at.getTime() - HOUR_MS), () => sealSession(leader, id));
       atMoment(at, () => openSession(leader, id));

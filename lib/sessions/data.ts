@@ -64,5 +64,5 @@ export const listSessionRows = (db: Db, cellarId: string) =>
     .from(sessions)
     .innerJoin(users, eq(users.id, sessions.leaderId))
     .where(eq(sessions.cellarId, cellarId))
-    .orderBy(desc(sessions.createdAt))
+    .orderBy(desc(sessions.createdAt), asc(sessions.title))
     .all();

@@ -79,7 +79,7 @@ export async function loadToday(slug: string) {
     .from(sessions)
     .where(and(eq(sessions.cellarId, access.cellar.id), inArray(sessions.state, states)))
     .all()
-    .sort((a, b) => states.indexOf(a.state) - states.indexOf(b.state))
+    .sort((a, b) => states.indexOf(a.state) - states.indexOf(b.state) || a.title.localeCompare(b.title))
     .map((session) => ({ ...session, waitsFor: WAITS_FOR[session.state] ?? '' }));
   const finished = db.select({ id: sessions.id, title: sessions.title, at: sessions.unsealedAt }).from(sessions).where(and(eq(sessions.cellarId, access.cellar.id), eq(sessions.state, 'unsealed'))).orderBy(desc(sessions.unsealedAt)).limit(5).all()
     .map(({ id, title, at }) => ({ id, title, on: showMoment(at!, access.cellar.timeZone) }));
