@@ -12,14 +12,14 @@ function masked(bytes: Buffer): string {
     .replaceAll(/(?:[0-9a-f]{4} ){15}[0-9a-f]{4}/g, '<seal>').replaceAll(/\b[0-9a-f]{64}\b/g, '<seal>')
     .replaceAll(/Seal [0-9a-f]{4} [0-9a-f]{4}/g, 'Seal <seal>').replaceAll(/(Seal (?:<!-- -->)?)[0-9a-f]{4}(<!-- --> (?:<!-- -->)?| )[0-9a-f]{4}/g, '$1<seal>')
     .replaceAll(/nonce(?:-|=\\?"|":\\?"|\\":\\")[\w+/=]+/g, '<nonce>')
-    .replaceAll(/\b[a-z2-7]{16}\b/g, '<key>').replaceAll(/\b\d{3}(?: ?|<!-- --> <!-- -->|\\?"," ",\\?")\d{3}\b/g, '<join>')
-    .replaceAll(/data:image\/svg\+xml;base64,[\w+/=]+/g, '<qr>')
-    .replaceAll(/([>"])\d+ (s|min)([<"])/g, '$1<ago>$3')
+    .replaceAll(/\b[a-z2-7]{16}\b/g, '<key>').replaceAll(/\b\d{3}(?: ?|<!-- --> <!-- -->|\\*",\\*" \\*",\\*")\d{3}\b/g, '<join>')
+    .replaceAll(/data:image\/svg\+xml;base64,[\w+/=]+/g, '<qr>').replaceAll(/T[0-9a-f]+,<qr>/g, '<qr>')
+    .replaceAll(/([>"])\d+ (s|min)([<\\"])/g, '$1<ago>$3')
     .replaceAll(/127\.0\.0\.1:\d+/g, '<host>')
     .replaceAll(/set-cookie: [^\n]*/g, 'set-cookie')
     .replaceAll(/\n(?:date|content-length|keep-alive|connection|x-nextjs-[\w-]+): [^\n]*/g, '')
     .replaceAll(/\d{1,2} \w{3} \d{4}, \d{2}:\d{2}|\d{4}-\d{2}-\d{2}[T ][\d:.]+Z?|\w{3}, \d{2} \w{3} \d{4} [\d:]+ GMT/g, '<time>')
-    .replaceAll(/"(receiptNo|silentS|clientAt|b|S)":("?)[^,}\]]*/g, '"$1"');
+    .replaceAll(/(\\*"(?:receiptNo|silentS|clientAt|b|S)\\*":)\\*"?[^,}\]]*/g, '$1');
 }
 
 /** One whole run; what a guest, a tasting member and a tasting leader received. */

@@ -1,0 +1,68 @@
+import AxeBuilder from '@axe-core/playwright';
+import { expect, test, type Page } from '@playwright/test';
+import { e2eFolder, readDemo } from '../support/demo';
+import { CELLAR, joinAsGuest, signedIn } from './support';
+
+const WIDTHS = [360, 1280];
+const MODES = ['paper', 'cellar'] as const;
+
+/** WCAG 2.2 A and AA by axe, and nothing wider than the screen. */
+async function check(page: Page, what: string): Promise<void> {
+  const { violations } = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']).analyze();
+  expect(violations.map((v) => `${what}: ${v.id} ${v.nodes.map((node) => node.target.join(' ')).slice(0, 3).join(' | ')}`)).toEqual([]);
+  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+  expect(`${what}: ${overflow} px too wide`).toBe(`${what}: 0 px too wide`);
+}
+
+async function inAllLights(page: Page, path: string): Promise<void> {
+  for (const width of WIDTHS) {
+    await page.setViewportSize({ width, height: 800 });
+    for (const mode of MODES) {
+      await page.context().addCookies([{ name: 'tercet-mode', value: mode, url: new URL(page.url()).origin }]);
+      await page.goto(path);
+      await expect(page.locator('html')).toHaveAttribute('data-mode', mode);
+      await check(page, `${path} at ${width} in ${mode}`);
+    }
+  }
+}
+
+test('desk screens', async ({ browser }) => {
+  test.setTimeout(240_000);
+  const owner = await signedIn(browser, 'owner');
+  await owner.goto(`${CELLAR}/sessions`);
+  const hrefOf = (name: string) => owner.getByRole('link', { name, exact: true }).first().getAttribute('href').then((href) => href!);
+  const open = await hrefOf('Open tasting');
+  const draft = await hrefOf('Next tasting');
+  const profile = await hrefOf('Wednesday tasting');
+  const triangle = await hrefOf('Thursday tasting');
+  await owner.goto(`${CELLAR}/barrels`);
+  const barrel = await hrefOf('31');
+  const paths = [
+    CELLAR, `${CELLAR}/barrels`, barrel, `${barrel}/edit`, `${barrel}/fill`, `${barrel}/pull`, `${CELLAR}/lots`, `${CELLAR}/lots/new`, `${CELLAR}/sessions`, open, draft, `${draft}/design`,
+    profile, `${profile}/results`, `${triangle}/results`, `${CELLAR}/calls`, `${CELLAR}/calls/new`, `${CELLAR}/lexicon/new`, `${CELLAR}/settings`, `${open}/pour`, '/account',
+  ];
+  for (const path of paths) await inAllLights(owner, path);
+});
+
+test('doors and the phone', async ({ browser, page }) => {
+  test.setTimeout(120_000);
+  await page.goto('/sign-in');
+  const { joinPath } = readDemo(e2eFolder());
+  for (const path of ['/sign-in', '/j', joinPath, '/check', '/nowhere']) await inAllLights(page, path);
+  const phone = await joinAsGuest(browser, joinPath, 'Axe');
+  const sheet = new URL(phone.url()).pathname;
+  for (const width of [320, 360, 768]) {
+    await phone.setViewportSize({ width, height: 740 });
+    for (const mode of MODES) {
+      await phone.context().addCookies([{ name: 'tercet-mode', value: mode, url: new URL(phone.url()).origin }]);
+      await phone.goto(sheet);
+      await expect(phone.getByRole('slider').first()).toBeVisible();
+      await check(phone, `sheet at ${width} in ${mode}`);
+    }
+  }
+  // Gloves: what is touched in the sheet is at least 48 px high (DESIGN), the light switch included.
+  for (const control of await phone.locator('button:visible, [role=slider]:visible, .tick-row:visible').all()) {
+    const box = (await control.boundingBox())!;
+    expect(`${await control.innerText()} ${Math.round(box.height)}`).toMatch(/ (4[89]|[5-9]\d|\d{3,})$/);
+  }
+});
