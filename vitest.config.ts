@@ -25,6 +25,8 @@ export default defineConfig({
           fileParallelism: false,
         },
       },
+      // Not part of `npm test`: `npm run bench`.
+      { extends: true, test: { name: 'bench', include: ['tests/bench/**/*.bench.ts'], fileParallelism: false } },
       { extends: true, test: { name: 'reference', include: ['tests/reference/**/*.test.ts'], testTimeout: 300_000 } },
     ],
   },

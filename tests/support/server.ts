@@ -27,6 +27,8 @@ interface Options {
   env?: Record<string, string>;
   /** A folder of an earlier server, to start again on its data. */
   folder?: string;
+  /** The built application to serve; the project's own unless a bench names another. */
+  cwd?: string;
   /** Runs `lib/start.mjs` as `npm start` does, in place of the server alone. */
   viaStart?: boolean;
 }
@@ -52,13 +54,13 @@ process.once('exit', () => {
  * Starts the production build on a free port with a database and secrets of its own and waits for
  * `/api/health`. The build must be there (`npm test` and `npm run build` see to it).
  */
-export async function startServer({ demo = false, env = {}, folder = mkdtempSync(path.join(tmpdir(), 'tercet-server-')), viaStart = false }: Options = {}): Promise<TestServer> {
+export async function startServer({ demo = false, env = {}, folder = mkdtempSync(path.join(tmpdir(), 'tercet-server-')), viaStart = false, cwd = ROOT }: Options = {}): Promise<TestServer> {
   made.add(folder);
   const port = await freePort();
   const databaseFile = path.join(folder, 'tercet.db');
   const command = viaStart ? [path.join(ROOT, 'lib/start.mjs')] : [path.join(ROOT, 'node_modules/next/dist/bin/next'), 'start', '-p', String(port), '-H', '127.0.0.1'];
   const child = spawn(process.execPath, command, {
-    cwd: ROOT,
+    cwd,
     stdio: ['ignore', 'pipe', 'pipe'],
     env: {
       ...process.env,
