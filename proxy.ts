@@ -38,6 +38,6 @@ export function proxy(request: NextRequest): NextResponse {
 }
 
 export const config = {
-  // Built files and the icon carry no page and need no nonce.
-  matcher: [{ source: '/((?!_next/static|icon.svg).*)' }],
+  // Built files and the icon carry no page, and answers of handlers set their own heads (lib/http).
+  matcher: [{ source: '/((?!_next/static|icon.svg|api/).*)' }],
 };

@@ -1,5 +1,5 @@
 import 'server-only';
-import { getIronSession, type IronSession } from 'iron-session';
+import { getIronSession, unsealData, type IronSession } from 'iron-session';
 import { cookies } from 'next/headers';
 import { isSecureReach } from '../reach';
 import { cookieSecret } from '../secrets';
@@ -19,11 +19,13 @@ export interface SeatCookie {
 const DAY_S = 24 * 60 * 60;
 export const SIGN_IN_DAYS = 30;
 
+const nameOf = (name: string): string => (isSecureReach() ? `__Host-${name}` : name);
+
 async function openCookie<T extends object>(name: string, days: number): Promise<IronSession<T>> {
   const secure = isSecureReach();
   return getIronSession<T>(await cookies(), {
     // `__Host-` binds the cookie to this very host, but browsers take it over https only.
-    cookieName: secure ? `__Host-${name}` : name,
+    cookieName: nameOf(name),
     password: cookieSecret(),
     ttl: days * DAY_S,
     cookieOptions: { secure, httpOnly: true, sameSite: 'lax', path: '/' },
@@ -31,4 +33,23 @@ async function openCookie<T extends object>(name: string, days: number): Promise
 }
 
 export const signInCookie = () => openCookie<SignInCookie>('tercet-sign-in', SIGN_IN_DAYS);
-export const seatCookie = () => openCookie<SeatCookie>('tercet-seat', 7);
+const SEAT_COOKIE = 'tercet-seat';
+const SEAT_DAYS = 7;
+export const seatCookie = () => openCookie<SeatCookie>(SEAT_COOKIE, SEAT_DAYS);
+
+/** Seals that were opened lately: a phone sends the same one with every delivery. */
+const opened = new Map<string, { cookie: SeatCookie; until: number }>();
+const OPENED_LIMIT = 2_000;
+const OPENED_MS = 5 * 60_000;
+
+/** The seats that this phone holds, for reading only; what the seal says is checked against the database by the caller. */
+export async function readSeatCookie(): Promise<SeatCookie> {
+  const sealed = (await cookies()).get(nameOf(SEAT_COOKIE))?.value;
+  if (!sealed) return {};
+  const known = opened.get(sealed);
+  if (known && known.until > Date.now()) return known.cookie;
+  const cookie = await unsealData<SeatCookie>(sealed, { password: cookieSecret(), ttl: SEAT_DAYS * DAY_S });
+  if (opened.size >= OPENED_LIMIT) opened.clear();
+  opened.set(sealed, { cookie, until: Date.now() + OPENED_MS });
+  return cookie;
+}

@@ -1,12 +1,13 @@
 import 'server-only';
 import { getDb, type Tx } from '@/db/client';
 import type { Admission, SessionState } from '@/db/enums';
-import { ballotItems, operations, seats, servings, sessions } from '@/db/schema';
-import { and, eq, inArray, isNull } from 'drizzle-orm';
+import { ballotItems, operations, seats, servings } from '@/db/schema';
+import { and, eq } from 'drizzle-orm';
 import { AppError } from '../errors';
 import { sha256Hex } from '../ids';
 import type { SeatAccess } from '../seats/access';
 import type { Operation, OperationBody, SyncRequest } from './schema';
+import { statements } from './statements';
 import type { SyncResponse } from './types';
 
 type Refusal = SyncResponse['refused'][number];
@@ -30,24 +31,40 @@ function admissionIn(state: SessionState): Admission | null {
   return state === 'draft' || state === 'sealed' ? null : 'late';
 }
 
-/** The places and lines that the seat's ballot has. */
-function ballotOf(tx: Tx, seatId: string, sessionId: string) {
-  const glasses = tx.select({ block: servings.block, position: servings.position }).from(servings).where(eq(servings.seatId, seatId)).all();
-  const lines = tx.select({ item: ballotItems.position, kind: ballotItems.kind }).from(ballotItems).where(eq(ballotItems.sessionId, sessionId)).all();
-  const chosen = tx.select({ block: operations.block }).from(operations).where(and(eq(operations.seatId, seatId), eq(operations.kind, 'choice'))).all();
-  return {
-    glasses: new Set(glasses.map((glass) => `${glass.block}/${glass.position}`)),
-    kinds: new Map(lines.map((line) => [line.item, line.kind])),
-    lockedSets: new Set(chosen.map((row) => row.block)),
-  };
+interface Ballot {
+  glasses: ReadonlySet<string>;
+  kinds: ReadonlyMap<number, 'line' | 'flag'>;
 }
 
-function refusalOf(body: OperationBody, isTriangle: boolean, ballot: ReturnType<typeof ballotOf>): RefusalCode | null {
+/** Sealing fixes servings and ballot for good, so what was read once stays true. Bounded: a server sees few seats at a time. */
+const knownBallots = new Map<string, Ballot>();
+const KNOWN_LIMIT = 2_000;
+
+/** The places and lines that the seat's ballot has. */
+function ballotOf(tx: Tx, seatId: string, sessionId: string): Ballot {
+  const known = knownBallots.get(seatId);
+  if (known) return known;
+  const glasses = tx.select({ block: servings.block, position: servings.position }).from(servings).where(eq(servings.seatId, seatId)).all();
+  const lines = tx.select({ item: ballotItems.position, kind: ballotItems.kind }).from(ballotItems).where(eq(ballotItems.sessionId, sessionId)).all();
+  const ballot: Ballot = {
+    glasses: new Set(glasses.map((glass) => `${glass.block}/${glass.position}`)),
+    kinds: new Map(lines.map((line) => [line.item, line.kind])),
+  };
+  if (knownBallots.size >= KNOWN_LIMIT) knownBallots.clear();
+  knownBallots.set(seatId, ballot);
+  return ballot;
+}
+
+/** The sets of a triangle that the seat has locked. */
+const lockedSetsOf = (tx: Tx, seatId: string): Set<number | null> =>
+  new Set(tx.select({ block: operations.block }).from(operations).where(and(eq(operations.seatId, seatId), eq(operations.kind, 'choice'))).all().map((row) => row.block));
+
+function refusalOf(body: OperationBody, isTriangle: boolean, ballot: Ballot, lockedSets: ReadonlySet<number | null>): RefusalCode | null {
   if (body.kind === 'submit') return null;
   if (!ballot.glasses.has(`${body.block}/${body.position}`)) return 'no_such_glass';
   if (body.kind === 'comment') return null;
   if ((body.kind === 'choice') !== isTriangle) return 'not_this_method';
-  if (body.kind === 'choice') return ballot.lockedSets.has(body.block) ? 'set_locked' : null;
+  if (body.kind === 'choice') return lockedSets.has(body.block) ? 'set_locked' : null;
   return ballot.kinds.get(body.item) === (body.kind === 'fault' ? 'flag' : 'line') ? null : 'no_such_line';
 }
 
@@ -68,54 +85,48 @@ const valueOf = (body: OperationBody) => ({
  */
 export function takeDelivery({ seat, session }: SeatAccess, delivery: SyncRequest): SyncResponse {
   return getDb().transaction((tx) => {
-    const state = tx.select({ state: sessions.state }).from(sessions).where(eq(sessions.id, session.id)).get()!.state;
-    const holds = tx.select({ generation: seats.tokenGeneration }).from(seats).where(eq(seats.id, seat.id)).get()!.generation === seat.tokenGeneration;
-    if (!holds) throw new AppError('unauthenticated', 'This seat was given to another phone.');
-    const admission = admissionIn(state);
-    const receipts: SyncResponse['receipts'] = [];
-    const refused: Refusal[] = [];
-    const refuse = (opId: string, code: RefusalCode) => refused.push({ opId, code, message: REFUSAL_TEXT[code] });
-
-    if (delivery.ops.length > 0) {
-      const ids = delivery.ops.map((op) => op.opId);
-      const known = new Map(tx.select().from(operations).where(inArray(operations.opId, ids)).all().map((row) => [row.opId, row]));
-      const ballot = ballotOf(tx, seat.id, session.id);
-      const receivedAt = new Date();
-      for (const op of delivery.ops) {
-        const hash = bodyHash(op);
-        const before = known.get(op.opId);
-        if (before) {
-          // Another seat's id is answered like a changed body: nothing is told of it.
-          if (before.seatId === seat.id && before.bodyHash === hash) receipts.push({ opId: op.opId, receiptNo: before.receiptNo, admission: before.admission });
-          else refuse(op.opId, 'body_changed');
-          continue;
-        }
-        const code = admission === null ? 'wrong_state' : refusalOf(op.body, session.method === 'triangle', ballot);
-        if (code || admission === null) {
-          refuse(op.opId, code ?? 'wrong_state');
-          continue;
-        }
-        const row = tx
-          .insert(operations)
-          .values({
-            opId: op.opId, cellarId: seat.cellarId, sessionId: session.id, seatId: seat.id, tokenGeneration: seat.tokenGeneration,
-            deviceId: op.deviceId, seq: op.seq, kind: op.body.kind, ...valueOf(op.body), bodyHash: hash,
-            clientAt: new Date(op.clientAt), receivedAt, admission,
-          })
-          .returning()
-          .get();
-        known.set(op.opId, row);
-        receipts.push({ opId: op.opId, receiptNo: row.receiptNo, admission });
-        if (op.body.kind === 'choice') ballot.lockedSets.add(op.body.block);
-        if (op.body.kind === 'submit' && admission === 'counted') {
-          tx.update(seats).set({ submittedAt: receivedAt }).where(and(eq(seats.id, seat.id), isNull(seats.submittedAt))).run();
-        }
-      }
-    }
-    tx.update(seats)
-      .set({ lastHeardAt: new Date(), onPhone: delivery.onPhone, ...(delivery.at && { atBlock: delivery.at.block, atPosition: delivery.at.position, atPhase: delivery.at.phase }) })
-      .where(eq(seats.id, seat.id))
-      .run();
-    return { protocol: 1, state, receipts, refused };
+    const present = statements().present.get({ seatId: seat.id })!;
+    if (present.generation !== seat.tokenGeneration) throw new AppError('unauthenticated', 'This seat was given to another phone.');
+    const at = new Date();
+    const taken = delivery.ops.length > 0 ? takeOperations(tx, { seat, session }, delivery.ops, admissionIn(present.state), at) : { receipts: [], refused: [], isHandedIn: false };
+    const place = delivery.at && { atBlock: delivery.at.block, atPosition: delivery.at.position, atPhase: delivery.at.phase };
+    const handedIn = taken.isHandedIn && seat.submittedAt === null && { submittedAt: at };
+    if (place || handedIn) tx.update(seats).set({ lastHeardAt: at, onPhone: delivery.onPhone, ...place, ...handedIn }).where(eq(seats.id, seat.id)).run();
+    else statements().heard.run({ at, onPhone: delivery.onPhone, seatId: seat.id });
+    return { protocol: 1, state: present.state, receipts: taken.receipts, refused: taken.refused };
   }, { behavior: 'immediate' });
+}
+
+function takeOperations(tx: Tx, { seat, session }: SeatAccess, ops: readonly Operation[], admission: Admission | null, receivedAt: Date) {
+  const receipts: SyncResponse['receipts'] = [];
+  const refused: Refusal[] = [];
+  const refuse = (opId: string, code: RefusalCode) => refused.push({ opId, code, message: REFUSAL_TEXT[code] });
+  const isTriangle = session.method === 'triangle';
+  const { knownOperation, keepOperation } = statements();
+  const ballot = ballotOf(tx, seat.id, session.id);
+  const lockedSets = isTriangle ? lockedSetsOf(tx, seat.id) : new Set<number | null>();
+  let isHandedIn = false;
+  for (const op of ops) {
+    const hash = bodyHash(op);
+    const before = knownOperation.get({ opId: op.opId });
+    if (before) {
+      // Another seat's id is answered like a changed body: nothing is told of it.
+      if (before.seatId === seat.id && before.bodyHash === hash) receipts.push({ opId: op.opId, receiptNo: before.receiptNo, admission: before.admission });
+      else refuse(op.opId, 'body_changed');
+      continue;
+    }
+    const code = admission === null ? 'wrong_state' : refusalOf(op.body, isTriangle, ballot, lockedSets);
+    if (code || admission === null) {
+      refuse(op.opId, code ?? 'wrong_state');
+      continue;
+    }
+    const { lastInsertRowid } = keepOperation.run({
+      opId: op.opId, cellarId: seat.cellarId, sessionId: session.id, seatId: seat.id, tokenGeneration: seat.tokenGeneration,
+      deviceId: op.deviceId, seq: op.seq, kind: op.body.kind, ...valueOf(op.body), bodyHash: hash, clientAt: new Date(op.clientAt), receivedAt, admission,
+    });
+    receipts.push({ opId: op.opId, receiptNo: Number(lastInsertRowid), admission });
+    if (op.body.kind === 'choice') lockedSets.add(op.body.block);
+    if (op.body.kind === 'submit' && admission === 'counted') isHandedIn = true;
+  }
+  return { receipts, refused, isHandedIn };
 }

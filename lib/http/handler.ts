@@ -5,7 +5,14 @@ import { AppError, asAppError } from '../errors';
 import { readJson } from './body';
 import { requireSameOrigin } from './origin';
 
-const NO_STORE = { 'cache-control': 'private, no-store' };
+/** No page, no script, no frame: an answer is data only. */
+export const ANSWER_HEADERS = {
+  'cache-control': 'private, no-store',
+  'content-security-policy': "default-src 'none'; frame-ancestors 'none'",
+  'x-content-type-options': 'nosniff',
+  'referrer-policy': 'same-origin',
+  'cross-origin-resource-policy': 'same-origin',
+};
 
 /** The body of every refusal by a handler. */
 export interface ErrorBody {
@@ -19,7 +26,7 @@ export function errorResponse(error: unknown): NextResponse<ErrorBody> {
   const body: ErrorBody = known
     ? { error: { code: known.code, message: known.message, ...(Object.keys(known.fieldErrors).length > 0 && { fields: { ...known.fieldErrors } }) } }
     : { error: { code: 'fault', message: 'The server failed at that. Nothing was saved.' } };
-  const headers: Record<string, string> = { ...NO_STORE };
+  const headers: Record<string, string> = { ...ANSWER_HEADERS };
   if (known?.code === 'busy') headers['retry-after'] = '1';
   if (known?.code === 'too_many') headers['retry-after'] = '300';
   return NextResponse.json(body, { status: known?.status ?? 500, headers });
@@ -44,7 +51,7 @@ export function writeHandler<Schema extends z.ZodType, Context>(
         throw new AppError('invalid', `${issue?.path.join('.') || 'body'}: ${issue?.message ?? 'not valid'}`);
       }
       const result = await run(parsed.data, request, context);
-      return result instanceof Response ? result : NextResponse.json(result, { headers: NO_STORE });
+      return result instanceof Response ? result : NextResponse.json(result, { headers: ANSWER_HEADERS });
     } catch (error) {
       return errorResponse(error);
     }
@@ -56,7 +63,7 @@ export function readHandler<Context>(run: (request: Request, context: Context) =
   return async (request: Request, context: Context): Promise<Response> => {
     try {
       const result = await run(request, context);
-      return result instanceof Response ? result : NextResponse.json(result, { headers: NO_STORE });
+      return result instanceof Response ? result : NextResponse.json(result, { headers: ANSWER_HEADERS });
     } catch (error) {
       return errorResponse(error);
     }

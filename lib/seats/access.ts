@@ -1,8 +1,7 @@
 import 'server-only';
-import { getDb } from '@/db/client';
-import { seats, sessions } from '@/db/schema';
-import { and, eq, isNotNull } from 'drizzle-orm';
-import { seatCookie } from '../auth/cookie';
+import type { seats } from '@/db/schema';
+import { readSeatCookie, seatCookie } from '../auth/cookie';
+import { statements } from '../ballots/statements';
 import { AppError } from '../errors';
 import type { SessionRow } from '../sessions/find';
 
@@ -16,15 +15,15 @@ export interface SeatAccess {
 
 /** The session behind a join link; null when there is none. */
 export const findByJoinKey = (joinKey: string): SessionRow | null =>
-  getDb().select().from(sessions).where(eq(sessions.joinKey, joinKey)).get() ?? null;
+  statements().sessionByJoinKey.get({ joinKey }) ?? null;
 
 /** The seat that this phone holds in the session; null when it holds none (or its seat was given to another phone). */
 export async function findSeat(joinKey: string): Promise<SeatAccess | null> {
   const session = findByJoinKey(joinKey);
   if (!session) return null;
-  const { seats: held = [] } = await seatCookie();
+  const { seats: held = [] } = await readSeatCookie();
   for (const { seatId, generation } of held) {
-    const seat = getDb().select().from(seats).where(and(eq(seats.id, seatId), eq(seats.sessionId, session.id), isNotNull(seats.claimedAt))).get();
+    const seat = statements().heldSeat.get({ seatId, sessionId: session.id });
     if (seat && seat.tokenGeneration === generation) return { seat, session };
   }
   return null;

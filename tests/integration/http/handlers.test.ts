@@ -105,9 +105,10 @@ describe('every route handler', () => {
   });
 
   it('sends the security headers with pages and answers', async () => {
-    for (const path of ['/sign-in', '/j', `/t/${joinKey}`, '/api/health']) {
+    for (const path of ['/sign-in', '/j', `/t/${joinKey}`, '/api/health', `/api/v1/sheet/${joinKey}`, '/api/v1/commitments/none']) {
       const { headers } = await guest.request(path);
-      expect(headers.get('content-security-policy')).toMatch(/script-src 'self' 'nonce-[\w+/=]+' 'strict-dynamic'.*frame-ancestors 'none'/);
+      const policy = path.startsWith('/api') ? /default-src 'none'; frame-ancestors 'none'/ : /script-src 'self' 'nonce-[\w+/=]+' 'strict-dynamic'.*frame-ancestors 'none'/;
+      expect(headers.get('content-security-policy')).toMatch(policy);
       expect(headers.get('x-content-type-options')).toBe('nosniff');
       expect(headers.get('referrer-policy')).toBe('same-origin');
       expect(headers.get('cache-control')).toMatch(/no-store/);

@@ -1,5 +1,5 @@
 import { publishedPlanFile } from '@/lib/blind/read-key';
-import { readHandler } from '@/lib/http/handler';
+import { ANSWER_HEADERS, readHandler } from '@/lib/http/handler';
 
 export const dynamic = 'force-dynamic';
 
@@ -8,9 +8,9 @@ export const GET = readHandler(async (_request: Request, { params }: RouteContex
   const { commitment } = await params;
   return new Response(publishedPlanFile(commitment), {
     headers: {
+      ...ANSWER_HEADERS,
       'content-type': 'application/json; charset=utf-8',
       'content-disposition': `attachment; filename="tercet-plan-${commitment.slice(0, 8)}.json"`,
-      'cache-control': 'private, no-store',
     },
   });
 });
