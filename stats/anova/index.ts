@@ -1,3 +1,4 @@
 export { balancedScores, type BalancedScores, type LongScores } from './balanced-scores';
 export { profileAnova, type AnovaLine, type ProfileAnova, type TestedLine } from './profile-anova';
 export { mixedAssessorModel, type MixedAssessorModel } from './mixed-assessor';
+export { oneWayAnova, type OneWayAnova } from './one-way';

@@ -72,7 +72,7 @@ describe('every route handler', () => {
       },
     });
     for (const sent of [large, stream]) {
-      const answer = await guest.request('/api/v1/sync', { method: 'POST', body: sent, headers: { 'content-type': 'application/json', origin: server.url }, ...(sent === stream && { duplex: 'half' }) } as RequestInit);
+      const answer = await guest.request('/api/v1/sync', { method: 'POST', body: sent, headers: { 'content-type': 'application/json', origin: server.url, connection: 'close' }, ...(sent === stream && { duplex: 'half' }) } as RequestInit);
       expect(answer.status).toBe(413);
     }
   });
