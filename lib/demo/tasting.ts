@@ -72,7 +72,7 @@ export function tasteProfile(db: Db, cellarId: string, sessionId: string, plante
   });
 }
 
-/** Lets a panel taste a triangle session: the first `correct` seats find the odd glass, the others don't. */
+/** Lets a panel taste a triangle session: `correct` of the seats, scattered over the table, find the odd glass. */
 export function tasteTriangle(db: Db, cellarId: string, sessionId: string, seatsTaken: number, correct: number, at: Date): void {
   const plan = takeOut(db, cellarId, sessionId);
   seatsOf(db, sessionId, seatsTaken).forEach((seat, index) => {
@@ -80,8 +80,10 @@ export function tasteTriangle(db: Db, cellarId: string, sessionId: string, seats
     const deviceId = newId();
     const set = plan.servings.filter((s) => s.seat === seat.number && s.block === 1);
     const odd = set.find((glass) => set.filter((other) => other.sample === glass.sample).length === 1)!;
-    const chosen = index < correct ? odd : set.find((glass) => glass !== odd)!;
-    say(db, seat, 1, deviceId, { kind: 'choice', block: 1, position: chosen.position, isGuess: index >= correct + 2 }, at);
+    // Five and twelve have no common factor: the finders sit apart.
+    const rank = (index * 5) % seatsTaken;
+    const chosen = rank < correct ? odd : set.find((glass) => glass !== odd)!;
+    say(db, seat, 1, deviceId, { kind: 'choice', block: 1, position: chosen.position, isGuess: rank >= correct + 2 }, at);
     handIn(db, seat, 2, deviceId, at);
   });
 }
