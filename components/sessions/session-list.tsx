@@ -3,11 +3,22 @@ import { Empty } from '@/components/ui/empty';
 import { Ring, type RingState } from '@/components/ui/ring';
 import type { SessionState } from '@/db/enums';
 import { METHOD_WORDS } from '@/lib/sessions/format';
+import type { SessionSort } from '@/lib/sessions/loaders';
 import type { SessionListItem } from '@/lib/sessions/types';
 
 const RING: Record<SessionState, RingState> = { draft: 'to-come', sealed: 'to-come', open: 'open', closed: 'waits', unsealed: 'done', abandoned: 'waits' };
 
-export function SessionList({ base, items, isFiltered, mayDesign }: { base: string; items: SessionListItem[]; isFiltered: boolean; mayDesign: boolean }) {
+interface Props {
+  base: string;
+  items: SessionListItem[];
+  isFiltered: boolean;
+  mayDesign: boolean;
+  sort: SessionSort;
+  hrefOf(sort: SessionSort): string;
+}
+
+export function SessionList({ base, items, isFiltered, mayDesign, sort, hrefOf }: Props) {
+  const head = (by: SessionSort, label: string) => <Link href={hrefOf(by)} aria-current={sort === by ? 'true' : undefined}>{label}</Link>;
   if (items.length === 0) {
     return isFiltered ? (
       <Empty action={<Link href={base}>Show all sessions</Link>}>No session fits that.</Empty>
@@ -17,7 +28,7 @@ export function SessionList({ base, items, isFiltered, mayDesign }: { base: stri
   }
   return (
     <table className="ledger folds">
-      <thead><tr><th>Session</th><th>State</th><th>Method</th><th>When</th><th>Leader</th></tr></thead>
+      <thead><tr><th scope="col">{head('title', 'Session')}</th><th scope="col">{head('state', 'State')}</th><th scope="col">Method</th><th scope="col">{head('when', 'When')}</th><th scope="col">{head('leader', 'Leader')}</th></tr></thead>
       <tbody>
         {items.map((item) => (
           <tr key={item.id}>

@@ -7,6 +7,8 @@ import type { FormResult } from '@/lib/form-action';
 import type { z } from 'zod';
 
 const HOLD_MS = 2000;
+/** Two presses closer than this are one slip. */
+const BREATH_MS = 700;
 
 interface Props<Schema extends z.ZodObject> {
   action: (previous: FormResult, data: FormData) => Promise<FormResult>;
@@ -20,7 +22,8 @@ interface Props<Schema extends z.ZodObject> {
 
 /**
  * A step that can't be undone: the guard is lifted first, then the button is held for two seconds.
- * By keyboard the button is pressed twice. Without JavaScript one press after lifting does it.
+ * Who can't hold (keyboard, screen reader, a hand that shakes) presses twice, with a breath between.
+ * Without JavaScript one press after lifting does it.
  */
 export function GuardedForm<Schema extends z.ZodObject>({ action, schema, submit, children, hidden }: Props<Schema>) {
   return (
@@ -42,7 +45,7 @@ export function GuardedForm<Schema extends z.ZodObject>({ action, schema, submit
 
 function HoldButton({ isPending, label }: { isPending: boolean; label: string }) {
   const timer = useRef<ReturnType<typeof setTimeout>>(undefined);
-  const isDone = useRef(false);
+  const armedAt = useRef(0);
   const [isHeld, setHeld] = useState(false);
   const [isArmed, setArmed] = useState(false);
   const release = () => {
@@ -51,19 +54,18 @@ function HoldButton({ isPending, label }: { isPending: boolean; label: string })
   };
   const press = (event: { currentTarget: HTMLButtonElement }) => {
     const button = event.currentTarget;
-    isDone.current = false;
     setHeld(true);
     timer.current = setTimeout(() => {
-      isDone.current = true;
       setHeld(false);
       button.form?.requestSubmit();
     }, HOLD_MS);
   };
   const onClick = (event: MouseEvent<HTMLButtonElement>) => {
-    // A click without a pointer comes from the keyboard or a screen reader: press twice.
-    if (event.detail === 0 && isArmed) return;
+    if (isArmed && event.timeStamp - armedAt.current > BREATH_MS) return;
     event.preventDefault();
-    if (event.detail === 0) setArmed(true);
+    if (isArmed) return;
+    armedAt.current = event.timeStamp;
+    setArmed(true);
   };
   return (
     <button className={`btn btn-main hold ${isHeld ? 'held' : ''}`} disabled={isPending} onPointerDown={press} onPointerUp={release} onPointerLeave={release} onPointerCancel={release} onClick={onClick} onBlur={() => setArmed(false)}>

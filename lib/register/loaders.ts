@@ -149,7 +149,10 @@ export async function loadPullForm(slug: string, vesselId: string) {
   return { access, vessel, lot: present ? `${present.lot}, ${present.lotName}` : null, at: localInput(now(), access.cellar.timeZone) };
 }
 
-export async function loadLots(slug: string, query: string, withArchived: boolean) {
+export const LOT_SORTS = ['vintage', 'code', 'name', 'vessels'] as const;
+export type LotSort = (typeof LOT_SORTS)[number];
+
+export async function loadLots(slug: string, query: string, sort: LotSort, withArchived: boolean) {
   const access = await loadAccess(slug, 'cellar.view');
   const filled = new Map(getDb().select({ lotId: fills.lotId, n: count() }).from(fills).where(and(eq(fills.cellarId, access.cellar.id), isNull(fills.toDay))).groupBy(fills.lotId).all().map((row) => [row.lotId, row.n]));
   const words = query.toLowerCase();
@@ -161,6 +164,13 @@ export async function loadLots(slug: string, query: string, withArchived: boolea
     .all()
     .filter((lot) => (withArchived || !lot.archivedAt) && `${lot.code} ${lot.name} ${lot.drink} ${lot.vintage ?? ''}`.toLowerCase().includes(words))
     .map((lot) => ({ id: lot.id, code: lot.code, name: lot.name, drink: lot.drink, vintage: lot.vintage, vessels: filled.get(lot.id) ?? 0, isArchived: lot.archivedAt !== null }));
+  const compare: Record<LotSort, (a: (typeof items)[number], b: (typeof items)[number]) => number> = {
+    vintage: (a, b) => (b.vintage ?? 0) - (a.vintage ?? 0),
+    code: (a, b) => natural.compare(a.code, b.code),
+    name: (a, b) => natural.compare(a.name, b.name),
+    vessels: (a, b) => b.vessels - a.vessels,
+  };
+  items.sort((a, b) => compare[sort](a, b) || compare.code(a, b));
   return { access, items };
 }
 

@@ -1,5 +1,6 @@
 import 'server-only';
 import { getDb } from '@/db/client';
+import { SESSION_STATES } from '@/db/enums';
 import { earlyOpenings, operations, seals, users } from '@/db/schema';
 import { and, asc, count, eq } from 'drizzle-orm';
 import QRCode from 'qrcode';
@@ -20,7 +21,19 @@ export async function qrPicture(text: string): Promise<string> {
   return `data:image/svg+xml;base64,${Buffer.from(svg).toString('base64')}`;
 }
 
-export async function loadSessions(slug: string, query: string, state: string): Promise<{ access: Access; items: SessionListItem[] }> {
+export const SESSION_SORTS = ['when', 'title', 'state', 'leader'] as const;
+export type SessionSort = (typeof SESSION_SORTS)[number];
+
+const timeOf = (session: SessionRow): number => (session.openedAt ?? session.scheduledFor ?? session.createdAt).getTime();
+const SESSION_ORDER: Record<SessionSort, (a: Listed, b: Listed) => number> = {
+  when: (a, b) => timeOf(b.session) - timeOf(a.session),
+  title: (a, b) => a.session.title.localeCompare(b.session.title),
+  state: (a, b) => SESSION_STATES.indexOf(a.session.state) - SESSION_STATES.indexOf(b.session.state),
+  leader: (a, b) => a.leader.localeCompare(b.leader),
+};
+type Listed = ReturnType<typeof listSessionRows>[number];
+
+export async function loadSessions(slug: string, query: string, state: string, sort: SessionSort): Promise<{ access: Access; items: SessionListItem[] }> {
   const access = await loadAccess(slug, 'session.list');
   const zone = access.cellar.timeZone;
   const mayDesign = allows(access.roles, 'session.design');
@@ -29,6 +42,7 @@ export async function loadSessions(slug: string, query: string, state: string): 
     .filter(({ session }) => mayDesign || session.state !== 'draft')
     .filter(({ session }) => state === '' || session.state === state)
     .filter(({ session, leader }) => `${session.title} ${leader}`.toLowerCase().includes(words))
+    .sort((a, b) => SESSION_ORDER[sort](a, b) || SESSION_ORDER.when(a, b) || SESSION_ORDER.title(a, b))
     .map(({ session, leader }) => ({
       id: session.id, title: session.title, method: session.method, state: session.state, leader,
       when: whenOf(session, zone),
@@ -37,8 +51,7 @@ export async function loadSessions(slug: string, query: string, state: string): 
 }
 
 function whenOf(session: SessionRow, zone: string): string {
-  const at = session.openedAt ?? session.scheduledFor ?? session.createdAt;
-  return showMoment(at, zone);
+  return showMoment(new Date(timeOf(session)), zone);
 }
 
 function listOpenings(access: Access, session: SessionRow): OpeningView[] {

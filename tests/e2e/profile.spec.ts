@@ -1,6 +1,6 @@
 import { expect, test } from '@playwright/test';
 import { e2eFolder, readDemo } from '../support/demo';
-import { joinAsGuest } from './support';
+import { CELLAR, joinAsGuest, signedIn } from './support';
 
 const stateOf = (phone: import('@playwright/test').Page, name: string) => phone.locator('.item', { has: phone.getByText(name, { exact: true }) }).locator('.state');
 
@@ -69,4 +69,23 @@ test('a whole sheet by keyboard alone', async ({ browser }) => {
   }
   await expect(phone.getByRole('heading', { name: 'Spit, rinse, wait' })).toBeVisible();
   await expect(phone.getByRole('button', { name: /Opens in \d+ s/ })).toBeDisabled();
+});
+
+test('a guarded step by keyboard alone: lift, press, press again', async ({ browser }) => {
+  const leader = await signedIn(browser, 'leader');
+  await leader.goto(`${CELLAR}/sessions`);
+  await leader.getByRole('link', { name: 'Next tasting' }).first().click();
+  await leader.waitForURL(/sessions\/[0-9a-f-]{36}$/);
+  const guard = leader.locator('details.guarded').filter({ has: leader.locator('button.hold', { hasText: 'Seal the plan' }) });
+  await guard.locator('summary').focus();
+  await leader.keyboard.press('Enter');
+  await guard.locator('button.hold').focus();
+  await leader.keyboard.press('Enter');
+  // One press, or two in one slip, seal nothing.
+  await leader.keyboard.press('Enter');
+  await expect(guard.getByRole('button', { name: 'Press again: seal the plan' })).toBeVisible();
+  await expect(leader.getByRole('listitem').filter({ hasText: 'draft' })).toHaveAttribute('aria-current', 'step');
+  await leader.waitForTimeout(900);
+  await leader.keyboard.press('Enter');
+  await expect(leader.getByRole('listitem').filter({ hasText: 'sealed' }).first()).toHaveAttribute('aria-current', 'step');
 });

@@ -4,16 +4,18 @@ import { Empty } from '@/components/ui/empty';
 import { LedgerHead, LedgerPage, LedgerRow } from '@/components/ui/ledger';
 import { allows } from '@/lib/auth/permissions';
 import { DRINK_WORDS } from '@/lib/register/format';
-import { loadLots } from '@/lib/register/loaders';
+import { LOT_SORTS, loadLots, type LotSort } from '@/lib/register/loaders';
 
 export const metadata: Metadata = { title: 'Lots' };
 
 export default async function LotsPage({ params, searchParams }: PageProps<'/c/[cellar]/lots'>) {
   const { cellar } = await params;
-  const { q, archived } = await searchParams;
+  const { q, sort: wanted, archived } = await searchParams;
   const query = typeof q === 'string' ? q : '';
-  const { access, items } = await loadLots(cellar, query, archived === 'yes');
+  const sort = LOT_SORTS.find((candidate) => candidate === wanted) ?? 'vintage';
+  const { access, items } = await loadLots(cellar, query, sort, archived === 'yes');
   const base = `/c/${cellar}/lots`;
+  const head = (by: LotSort, label: string) => <Link href={`${base}?${new URLSearchParams({ ...(query && { q: query }), sort: by, ...(archived === 'yes' && { archived: 'yes' }) })}`} aria-current={sort === by ? 'true' : undefined}>{label}</Link>;
   const add = allows(access.roles, 'register.edit') && <Link className="btn btn-main" href={`${base}/new`}>Add a lot</Link>;
   return (
     <LedgerPage>
@@ -26,7 +28,7 @@ export default async function LotsPage({ params, searchParams }: PageProps<'/c/[
         </form>
         {items.length === 0 ? <Empty action={query ? <Link href={base}>Show all</Link> : add}>{query ? `No lot fits “${query}”.` : 'No lot yet. A lot is followed from vessel to vessel.'}</Empty> : (
           <table className="ledger folds">
-            <thead><tr><th scope="col">Lot</th><th scope="col">Name</th><th scope="col">Drink</th><th scope="col" className="num n">Vintage</th><th scope="col" className="num n">Vessels now</th></tr></thead>
+            <thead><tr><th scope="col">{head('code', 'Lot')}</th><th scope="col">{head('name', 'Name')}</th><th scope="col">Drink</th><th scope="col" className="num n">{head('vintage', 'Vintage')}</th><th scope="col" className="num n">{head('vessels', 'Vessels now')}</th></tr></thead>
             <tbody>
               {items.map((lot) => (
                 <tr key={lot.id}>

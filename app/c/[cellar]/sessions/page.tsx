@@ -4,17 +4,19 @@ import { SessionList } from '@/components/sessions/session-list';
 import { LedgerHead, LedgerPage, LedgerRow } from '@/components/ui/ledger';
 import { SESSION_STATES } from '@/db/enums';
 import { allows } from '@/lib/auth/permissions';
-import { loadSessions } from '@/lib/sessions/loaders';
+import { loadSessions, SESSION_SORTS, type SessionSort } from '@/lib/sessions/loaders';
 
 export const metadata: Metadata = { title: 'Sessions' };
 
 export default async function SessionsPage({ params, searchParams }: PageProps<'/c/[cellar]/sessions'>) {
   const { cellar } = await params;
-  const { q, state } = await searchParams;
+  const { q, state, sort: by } = await searchParams;
   const query = typeof q === 'string' ? q : '';
   const wanted = SESSION_STATES.find((candidate) => candidate === state) ?? '';
-  const { access, items } = await loadSessions(cellar, query, wanted);
+  const sort = SESSION_SORTS.find((candidate) => candidate === by) ?? 'when';
+  const { access, items } = await loadSessions(cellar, query, wanted, sort);
   const base = `/c/${cellar}/sessions`;
+  const hrefOf = (order: SessionSort) => `${base}?${new URLSearchParams({ ...(query && { q: query }), ...(wanted && { state: wanted }), sort: order })}`;
   const mayDesign = allows(access.roles, 'session.design');
   return (
     <LedgerPage>
@@ -28,7 +30,7 @@ export default async function SessionsPage({ params, searchParams }: PageProps<'
           </select>
           <button className="btn">Show</button>
         </form>
-        <SessionList base={base} items={items} isFiltered={query !== '' || wanted !== ''} mayDesign={mayDesign} />
+        <SessionList base={base} items={items} sort={sort} hrefOf={hrefOf} isFiltered={query !== '' || wanted !== ''} mayDesign={mayDesign} />
       </LedgerRow>
     </LedgerPage>
   );
