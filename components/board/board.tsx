@@ -5,6 +5,7 @@ import { Ring } from '@/components/ui/ring';
 import type { Method } from '@/db/enums';
 import type { Board as BoardData, BoardSeat } from '@/lib/board/types';
 import { UNIT_WORDS } from '@/lib/sessions/format';
+import { EraseName } from './erase-name';
 import { SeatLink } from './seat-link';
 
 const EVERY_MS = 2000;
@@ -39,16 +40,17 @@ interface Props {
 
 /** Who is where, live. Counts only. */
 export function Board({ url, method, initial, cellar, sessionId }: Props) {
-  const { data, error } = useSWR(url, fetchBoard, { refreshInterval: EVERY_MS, fallbackData: initial, dedupingInterval: 500 });
+  const { data, error } = useSWR(url, fetchBoard, { refreshInterval: (latest) => ((latest ?? initial).state === 'unsealed' ? 0 : EVERY_MS), fallbackData: initial, dedupingInterval: 500 });
   const board = data ?? initial;
+  const isOpen = board.state === 'open';
   const [, many] = UNIT_WORDS[method];
   const shown = board.seats.filter((seat) => seat.isClaimed || !seat.isReserve);
   const freeReserves = board.seats.length - shown.length;
   const received = shown.reduce((sum, seat) => sum + seat.received, 0);
   const expected = shown.length * board.unitsPerSeat;
   const onPhones = shown.reduce((sum, seat) => sum + seat.onPhone, 0);
-  const waiting = shown.filter((seat) => seat.isClaimed && whereOf(seat, method, board.unitsPerSeat).waits);
-  const free = shown.filter((seat) => !seat.isClaimed).map((seat) => seat.label);
+  const waiting = shown.filter((seat) => isOpen && seat.isClaimed && whereOf(seat, method, board.unitsPerSeat).waits);
+  const free = shown.filter((seat) => isOpen && !seat.isClaimed).map((seat) => seat.label);
   return (
     <div className="stack">
       {error && <p className="caution" role="status">The board has lost the server; these figures may be old. Answers are safe on the phones.</p>}
@@ -63,7 +65,7 @@ export function Board({ url, method, initial, cellar, sessionId }: Props) {
         </ul>
       )}
       <table className="ledger folds tight">
-        <thead><tr><th className="num n">Seat</th><th>Name</th><th>Where</th><th>{many}</th><th className="num">Received</th><th className="num">On phone</th><th className="num">Last heard</th><th>Phone lost?</th></tr></thead>
+        <thead><tr><th className="num n">Seat</th><th>Name</th><th>Where</th><th>{many}</th><th className="num">Received</th><th className="num">On phone</th><th className="num">Last heard</th><th>{isOpen ? 'Phone lost?' : 'Asked for?'}</th></tr></thead>
         <tbody>
           {shown.map((seat) => {
             const where = whereOf(seat, method, board.unitsPerSeat);
@@ -76,7 +78,10 @@ export function Board({ url, method, initial, cellar, sessionId }: Props) {
                 <td className="num" data-label="Received">{seat.isClaimed ? seat.received : '–'}</td>
                 <td className="num" data-label="On phone">{seat.onPhone || ''}</td>
                 <td className="num soft" data-label="Last heard">{ago(seat.silentS)}</td>
-                <td>{seat.isClaimed && <SeatLink cellar={cellar} sessionId={sessionId} seat={seat.number} label={seat.label} />}</td>
+                <td>
+                  {seat.isClaimed && isOpen && <SeatLink cellar={cellar} sessionId={sessionId} seat={seat.number} label={seat.label} />}
+                  {seat.name !== '' && !isOpen && <EraseName cellar={cellar} sessionId={sessionId} seat={seat.number} label={seat.label} />}
+                </td>
               </tr>
             );
           })}

@@ -51,6 +51,11 @@ export function SessionSteps({ access, session }: Props) {
         </LedgerRow>
       )}
       {session.state === 'unsealed' && <LedgerRow question="What came out?"><Link className="btn btn-main" href={`${base}/results`}>Results</Link></LedgerRow>}
+      {session.state === 'unsealed' && mayRun && (
+        <LedgerRow question="Who sat where?" note="A name goes when its person asks; the answers stay.">
+          <Board url={`/api/v1/c/${which.cellar}/sessions/${session.id}/board`} method={session.method} initial={readBoard(access, session.id)} {...which} />
+        </LedgerRow>
+      )}
       {session.commitment && (
         <LedgerRow question="Was anything changed?" note="SHA-256 of the plan file, published at sealing.">
           <p className="soft">Sealed {session.sealedAt}</p>

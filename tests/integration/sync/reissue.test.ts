@@ -81,4 +81,9 @@ it('phones that answer two hundred times while the leader closes: each answer is
   expect(again.flatMap((answer) => (answer.body as SyncResponse).receipts).filter((receipt) => receipt.admission === 'late').length).toBe(late.length);
   const closed = await leader.get(path);
   expect(closed.text).toMatch(late.length > 0 ? new RegExp(`${late.length} answers came after the close`) : /Closed/);
+  // A person may ask for the name to go; the answers stay.
+  expect(closed.text).toContain('Ines');
+  const erased = await leader.submitForm(closed, 'form:has(input[name=seat][value="1"])');
+  expect(erased.text).not.toContain('Ines');
+  expect(erased.text).toContain('erased');
 });
