@@ -52,7 +52,7 @@ const lineOf = (ss: number, df: number): AnovaLine => ({ ss, df, ms: ss / df });
  * Mixed two-way analysis of variance of one descriptor: assessors random, products fixed, their
  * interaction random, replicates within. score = μ + assessor + product + interaction + error;
  * F(product) = MS product / MS interaction on (J − 1, (I − 1)(J − 1)) degrees of freedom.
- * Complete tables only; for missing scores use the REML model.
+ * Complete tables only: a table with gaps is refused, and the caller drops assessors or products until it is whole.
  *
  * Units: the score's. Sums of squares are taken about means (two passes), so that a large common
  * level costs no digits. Throws what `requireBalancedScores` throws.
