@@ -4,9 +4,6 @@ import { format } from 'date-fns';
 /** A moment as a day in the zone: "6 May 2026". */
 export const showDay = (at: Date, zone: string): string => format(new TZDate(at, zone), 'd MMM yyyy');
 
-/** A moment as a time of day in the zone: "10:42". */
-export const showClock = (at: Date, zone: string): string => format(new TZDate(at, zone), 'HH:mm');
-
 /** A moment as day and time in the zone: "6 May 2026, 10:42". */
 export const showMoment = (at: Date, zone: string): string => format(new TZDate(at, zone), 'd MMM yyyy, HH:mm');
 

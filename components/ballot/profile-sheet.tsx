@@ -1,10 +1,9 @@
 'use client';
 
 import { useRef, useState } from 'react';
-import type { SheetItem, Sheet } from '@/lib/ballots/types';
+import type { SheetItem } from '@/lib/ballots/types';
 import { commentKey, faultKey, scoreKey } from '@/lib/offline/answers';
-import type { SheetState, SheetStore } from '@/lib/offline/store';
-import type { Place } from '@/lib/offline/types';
+import type { SheetState } from '@/lib/offline/store';
 import { CommentBox } from './comment-box';
 import { FineSteps } from './fine-steps';
 import { codeAt, linesOf, nextGlass, phasesOf } from './flow';
@@ -12,20 +11,13 @@ import { GlassLabel } from './glass-label';
 import { KeptLine, Trouble } from './kept-line';
 import { LineScale } from './line-scale';
 import { PHASE_WORDS } from './words';
+import type { SheetPart } from './sheet-part';
 
 /** Keys and fine steps come in bursts: the last of a burst is what is kept. */
 const BURST_MS = 250;
 
-interface Props {
-  sheet: Sheet;
-  store: SheetStore;
-  state: SheetState;
-  place: Place;
-  go(place: Place): void;
-}
-
 /** One part of one glass: the code, its lines, the way on. */
-export function ProfileSheet({ sheet, store, state, place, go }: Props) {
+export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
   const { block, position } = place;
   const phase = place.phase ?? phasesOf(sheet)[0]!;
   const phases = phasesOf(sheet);

@@ -1,24 +1,14 @@
 'use client';
 
 import { Code } from '@/components/ui/code';
-import type { Sheet } from '@/lib/ballots/types';
 import { choiceKey } from '@/lib/offline/answers';
-import type { SheetState, SheetStore } from '@/lib/offline/store';
-import type { Place } from '@/lib/offline/types';
 import { gapsOf } from './flow';
 import { Trouble } from './kept-line';
 import { PHASE_WORDS } from './words';
-
-interface Props {
-  sheet: Sheet;
-  store: SheetStore;
-  state: SheetState;
-  place: Place;
-  go(place: Place): void;
-}
+import type { SheetPart } from './sheet-part';
 
 /** Before handing in: what is still untouched, each with the way back to it. */
-export function ReviewSheet({ sheet, store, state, place, go }: Props) {
+export function ReviewSheet({ sheet, store, state, place, go }: SheetPart) {
   const gaps = sheet.method === 'profile' ? gapsOf(sheet, state.answers) : [];
   const openSets = sheet.method === 'triangle' ? sheet.blocks.filter(({ block }) => !state.answers.has(choiceKey(block))) : [];
   const isClosed = state.sessionState !== 'open';

@@ -3,26 +3,16 @@
 import { useState, type KeyboardEvent } from 'react';
 import { Code } from '@/components/ui/code';
 import { Ring } from '@/components/ui/ring';
-import type { Sheet } from '@/lib/ballots/types';
 import { choiceKey } from '@/lib/offline/answers';
-import type { SheetState, SheetStore } from '@/lib/offline/store';
-import type { Place } from '@/lib/offline/types';
 import { COMMENT_MAX } from '@/lib/ballots/schema';
 import { nextBlock } from './flow';
 import { KeptLine, Trouble } from './kept-line';
+import type { SheetPart } from './sheet-part';
 
 const ORDINALS = ['1st', '2nd', '3rd'];
 
-interface Props {
-  sheet: Sheet;
-  store: SheetStore;
-  state: SheetState;
-  place: Place;
-  go(place: Place): void;
-}
-
 /** One set of three: choose the one that differs, then lock. A locked set stays as it is (ISO 4120, 7.5). */
-export function TriangleSheet({ sheet, store, state, place, go }: Props) {
+export function TriangleSheet({ sheet, store, state, place, go }: SheetPart) {
   const { block } = place;
   const glasses = sheet.blocks.find((candidate) => candidate.block === block)!.glasses;
   const [chosen, setChosen] = useState<number | null>(null);

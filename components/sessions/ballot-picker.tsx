@@ -3,10 +3,8 @@
 import { useState } from 'react';
 import type { FieldMetadata } from '@conform-to/react';
 import { TicksField } from '@/components/forms/fields';
+import { useChosen } from '@/components/forms/use-chosen';
 import type { DesignChoices } from '@/lib/sessions/types';
-
-const initial = (field: FieldMetadata<unknown>): Set<string> =>
-  new Set(Array.isArray(field.initialValue) ? (field.initialValue as string[]) : field.initialValue ? [String(field.initialValue)] : []);
 
 interface Props {
   lines: FieldMetadata<unknown>;
@@ -17,14 +15,8 @@ interface Props {
 /** Descriptors of the cellar's lexicon, by family; an aroma can be asked for in the nose, on the palate, or both. */
 export function BallotPicker({ lines, flags, choices }: Props) {
   const [filter, setFilter] = useState('');
-  const [chosen, setChosen] = useState(() => initial(lines));
+  const { chosen, toggle } = useChosen(lines);
   const word = filter.trim().toLowerCase();
-  const toggle = (value: string) =>
-    setChosen((before) => {
-      const after = new Set(before);
-      if (!after.delete(value)) after.add(value);
-      return after;
-    });
   return (
     <section className="stack">
       <h2>The ballot</h2>

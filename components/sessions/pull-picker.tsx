@@ -2,18 +2,13 @@
 
 import type { FieldMetadata } from '@conform-to/react';
 import { useState } from 'react';
+import { useChosen } from '@/components/forms/use-chosen';
 
 /** The newest pulls in a short window, with a filter; what is ticked stays in view. */
 export function PullPicker({ field, label, pulls }: { field: FieldMetadata<unknown>; label: string; pulls: { value: string; label: string }[] }) {
   const [filter, setFilter] = useState('');
-  const [chosen, setChosen] = useState(() => new Set<string>(Array.isArray(field.initialValue) ? (field.initialValue as string[]) : field.initialValue ? [String(field.initialValue)] : []));
+  const { chosen, toggle } = useChosen(field);
   const words = filter.toLowerCase().split(/\s+/).filter(Boolean);
-  const toggle = (value: string) =>
-    setChosen((before) => {
-      const after = new Set(before);
-      if (!after.delete(value)) after.add(value);
-      return after;
-    });
   return (
     <fieldset className="field" id={field.id} aria-describedby={`${field.id}-hint`}>
       <legend>{label}</legend>

@@ -25,7 +25,7 @@ export function SessionSteps({ access, session }: Props) {
     <>
       {session.state === 'draft' && mayDesign && <DraftStep base={base} which={which} session={session} />}
       {session.isPourer && session.state !== 'draft' && session.state !== 'abandoned' && (
-        <LedgerRow question="You pour" note="Reading it is logged. Do not taste in this session."><Link className="btn btn-main" href={`${base}/pour`}>Pour sheet</Link></LedgerRow>
+        <LedgerRow question="You pour" note="Reading it is logged. Do not taste in this session."><Link className="btn btn-main" href={`${base}/pour`} prefetch={false}>Pour sheet</Link></LedgerRow>
       )}
       {session.state === 'sealed' && mayRun && (
         <LedgerRow question="Ready?" note="Opening lets people take their seats and answer."><OpenForm {...which} /></LedgerRow>

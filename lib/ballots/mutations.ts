@@ -91,7 +91,9 @@ export function takeDelivery({ seat, session }: SeatAccess, delivery: SyncReques
     const taken = delivery.ops.length > 0 ? takeOperations(tx, { seat, session }, delivery.ops, admissionIn(present.state), at) : { receipts: [], refused: [], isHandedIn: false };
     const place = delivery.at && { atBlock: delivery.at.block, atPosition: delivery.at.position, atPhase: delivery.at.phase };
     const handedIn = taken.isHandedIn && seat.submittedAt === null && { submittedAt: at };
-    if (place || handedIn) tx.update(seats).set({ lastHeardAt: at, onPhone: delivery.onPhone, ...place, ...handedIn }).where(eq(seats.id, seat.id)).run();
+    // Who left and answers again is back, and owes a ballot like the others.
+    const cameBack = seat.leftAt !== null && taken.receipts.length > 0 && present.state === 'open' && { leftAt: null };
+    if (place || handedIn || cameBack) tx.update(seats).set({ lastHeardAt: at, onPhone: delivery.onPhone, ...place, ...handedIn, ...cameBack }).where(eq(seats.id, seat.id)).run();
     else statements().heard.run({ at, onPhone: delivery.onPhone, seatId: seat.id });
     return { protocol: 1, state: present.state, receipts: taken.receipts, refused: taken.refused };
   }, { behavior: 'immediate' });

@@ -9,7 +9,6 @@ const publicEntry = (row: typeof descriptors.$inferSelect) => {
   const { id, version, name, sense, family, definition, reference, phase, lowAnchor, highAnchor, archivedAt } = row;
   return { id, version, name, sense, family, definition, reference, phase, lowAnchor, highAnchor, isArchived: archivedAt !== null };
 };
-export type LexiconEntry = ReturnType<typeof publicEntry>;
 
 /** The lexicon by family, filtered by any part of a word or definition. */
 export async function loadLexicon(slug: string, query: string, withArchived: boolean) {

@@ -14,7 +14,7 @@ type Reader = Tx | Db;
 export function listOperations(db: Reader, session: SessionRow): OperationFact[] {
   return db
     .select({
-      seatId: operations.seatId, generation: operations.tokenGeneration, seq: operations.seq, receiptNo: operations.receiptNo,
+      seatId: operations.seatId, tokenGeneration: operations.tokenGeneration, seq: operations.seq, receiptNo: operations.receiptNo,
       kind: operations.kind, block: operations.block, position: operations.position, item: operations.item,
       number: operations.valueNumber, text: operations.valueText, isGuess: operations.isGuess, admission: operations.admission,
     })

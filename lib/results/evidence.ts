@@ -1,15 +1,8 @@
-import type { OperationKind, SeatRole } from '@/db/enums';
+import type { SeatRole } from '@/db/enums';
+import { standingOperations, type StandingFact } from '../ballots/standing';
 
 /** One operation, as far as counting needs it. */
-export interface OperationFact {
-  seatId: string;
-  generation: number;
-  seq: number;
-  receiptNo: number;
-  kind: OperationKind;
-  block: number | null;
-  position: number | null;
-  item: number | null;
+export interface OperationFact extends StandingFact {
   number: number | null;
   text: string | null;
   isGuess: boolean | null;
@@ -27,43 +20,18 @@ export interface CountedAnswers {
   late: Map<string, number>;
 }
 
-/** What an operation is an answer to; a score and taking it back share the place. */
-function placeOf(op: OperationFact): string {
-  const kind = op.kind === 'clear' ? 'score' : op.kind;
-  // A set has one choice, whichever glass it names.
-  const position = op.kind === 'choice' ? '' : op.position;
-  return `${op.seatId}/${kind}/${op.block}/${position}/${op.item ?? ''}`;
-}
-
-/**
- * Whether `op` stands and `kept` gives way. The latest value counts, by the seat's generation and
- * then the phone's own count; of a choice, which is final, the first one received.
- */
-function standsOver(op: OperationFact, kept: OperationFact): boolean {
-  if (op.kind === 'choice') return op.receiptNo < kept.receiptNo;
-  if (op.generation !== kept.generation) return op.generation > kept.generation;
-  if (op.seq !== kept.seq) return op.seq > kept.seq;
-  return op.receiptNo > kept.receiptNo;
-}
-
 /** Sorts what counts from what was late, replaced or taken back. Late operations count nowhere. */
 export function countAnswers(operations: readonly OperationFact[]): CountedAnswers {
-  const standing = new Map<string, OperationFact>();
   const late = new Map<string, number>();
-  let replaced = 0;
+  const counted: OperationFact[] = [];
   for (const op of operations) {
     if (op.kind === 'submit') continue;
-    if (op.isLate) {
-      late.set(op.seatId, (late.get(op.seatId) ?? 0) + 1);
-      continue;
-    }
-    const place = placeOf(op);
-    const kept = standing.get(place);
-    if (kept) replaced += 1;
-    if (!kept || standsOver(op, kept)) standing.set(place, op);
+    if (op.isLate) late.set(op.seatId, (late.get(op.seatId) ?? 0) + 1);
+    else counted.push(op);
   }
+  const { standing, replaced } = standingOperations(counted);
   const answers: CountedAnswers = { scores: [], faults: [], choices: [], comments: [], replaced, cleared: 0, late };
-  for (const op of standing.values()) {
+  for (const op of standing) {
     if (op.kind === 'score' && op.number !== null) answers.scores.push(op);
     else if (op.kind === 'clear') answers.cleared += 1;
     else if (op.kind === 'fault' && op.number === 1) answers.faults.push(op);

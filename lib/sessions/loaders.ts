@@ -55,7 +55,6 @@ function whenOf(session: SessionRow, zone: string): string {
 }
 
 function listOpenings(access: Access, session: SessionRow): OpeningView[] {
-  const names = new Map(listMembersEver(access.cellar.id));
   return getDb()
     .select()
     .from(earlyOpenings)
@@ -63,16 +62,17 @@ function listOpenings(access: Access, session: SessionRow): OpeningView[] {
     .orderBy(asc(earlyOpenings.requestedAt))
     .all()
     .map((row) => ({
-      id: row.id, code: row.code, reason: row.reason, requestedBy: names.get(row.requestedBy) ?? 'a former member',
+      id: row.id, code: row.code, reason: row.reason, requestedBy: nameOf(row.requestedBy),
       requestedAt: showMoment(row.requestedAt, access.cellar.timeZone),
       state: row.approvedAt ? 'approved' as const : row.refusedAt ? 'refused' as const : 'waits' as const,
-      approvedBy: row.approvedBy ? (names.get(row.approvedBy) ?? 'a former member') : null,
+      approvedBy: row.approvedBy ? nameOf(row.approvedBy) : null,
       isOwnRequest: row.requestedBy === access.user.id,
       mayRead: row.approvedAt !== null && row.code !== null && (row.requestedBy === access.user.id || row.approvedBy === access.user.id),
     }));
 }
 
-const listMembersEver = (_cellarId: string): [string, string][] => getDb().select({ id: users.id, name: users.name }).from(users).all().map((row) => [row.id, row.name]);
+/** A person's name by id: members, and those who were. */
+const nameOf = (userId: string): string => getDb().select({ name: users.name }).from(users).where(eq(users.id, userId)).get()?.name ?? 'a former member';
 
 /** A title or instruction that names what is in the glass gives the blind away. */
 function neutralityWarnings(session: SessionRow): string[] {
@@ -100,7 +100,7 @@ export async function loadSession(slug: string, sessionId: string): Promise<{ ac
     session: {
       id: row.id, version: row.version, title: row.title, instruction: row.instruction, method: row.method, state: row.state,
       privateQuestion: (mayDesign && !taster) || row.unsealedAt ? row.privateQuestion : null,
-      leader: listMembersEver(access.cellar.id).find(([id]) => id === row.leaderId)?.[1] ?? '',
+      leader: nameOf(row.leaderId),
       scheduledFor: show(row.scheduledFor),
       samples: mayDesign || row.unsealedAt ? design.samples.map(({ label, isControl }) => ({ label, isControl })).sort((a, b) => a.label.localeCompare(b.label, 'en', { numeric: true })) : [],
       lines: design.items.filter((item) => item.kind === 'line').map(({ name, phase }) => ({ name, phase })),

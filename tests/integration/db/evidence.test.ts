@@ -1,5 +1,6 @@
 import { beforeAll, describe, expect, it } from 'vitest';
 import type { Db } from '@/db/client';
+import { verifyAuditChain } from '@/lib/audit/verify';
 import { fillDemo } from '@/lib/demo/fill';
 import { testDb } from '../../support/db';
 
@@ -35,5 +36,15 @@ describe('evidence is append-only, also for somebody with the database in hand',
       expect(() => db.$client.prepare("UPDATE sessions SET state = ? WHERE state = ?").run(to, from)).toThrow(/a session goes/);
     }
     expect(() => db.$client.exec("UPDATE ballot_items SET name = 'x' WHERE session_id IN (SELECT id FROM sessions WHERE state = 'open')")).toThrow(/fixed by sealing/);
+  });
+
+  it('shows a changed entry of the audit log where the chain breaks', () => {
+    const { cellarId } = db.$client.prepare('SELECT cellar_id AS cellarId FROM audit_events LIMIT 1').get() as { cellarId: string };
+    const whole = verifyAuditChain(db, cellarId);
+    expect(whole.brokenAt).toBeNull();
+    expect(whole.entries).toBeGreaterThan(8);
+    // Somebody with the file in hand can drop the trigger; the chain still tells.
+    db.$client.exec("DROP TRIGGER audit_events_no_update; UPDATE audit_events SET action = 'session.opened ' WHERE seq = 5");
+    expect(verifyAuditChain(db, cellarId).brokenAt).toBe(5);
   });
 });

@@ -1,5 +1,5 @@
 import Database from 'better-sqlite3';
-import { cpSync, mkdtempSync, readFileSync, writeFileSync } from 'node:fs';
+import { cpSync, mkdtempSync, readdirSync, readFileSync, writeFileSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import path from 'node:path';
 import { describe, expect, it } from 'vitest';
@@ -78,7 +78,9 @@ describe('migrations', () => {
   });
 
   it('never drop a table or cascade a deletion in this project without being looked at', () => {
-    const sql = readFileSync(path.join(own, '0000_first.sql'), 'utf8') + readFileSync(path.join(own, '0001_evidence_triggers.sql'), 'utf8');
+    const files = readdirSync(own).filter((name) => name.endsWith('.sql'));
+    expect(files.length).toBeGreaterThanOrEqual(2);
+    const sql = files.map((name) => readFileSync(path.join(own, name), 'utf8')).join('\n');
     expect(sql).not.toMatch(/DROP TABLE/i);
     expect(sql).not.toMatch(/ON DELETE CASCADE/i);
     for (const trigger of REQUIRED_TRIGGERS) expect(sql).toContain(`CREATE TRIGGER ${trigger}`);

@@ -7,7 +7,7 @@ import { takeDelivery } from '@/lib/ballots/mutations';
 import type { OperationBody } from '@/lib/ballots/schema';
 import type { SeatAccess } from '@/lib/seats/access';
 import { findSession } from '@/lib/sessions/find';
-import { closeSession } from '@/lib/sessions/lifecycle';
+import { closeSession, seatsThatOwe } from '@/lib/sessions/lifecycle';
 import { makeScene, type Scene } from '../blind/scene';
 
 let scene: Scene;
@@ -104,5 +104,15 @@ describe('a delivery', () => {
     const fresh = { ...old, seat: { ...old.seat, tokenGeneration: 2 } };
     deliver(fresh, [op(score(70), 1)]);
     expect(loadSheet(fresh).answers.scores).toMatchObject([{ value: 70 }]);
+  });
+
+  it('of somebody who had left brings the seat back among those that owe', () => {
+    const seat = seatOf(scene.profileId, 1);
+    scene.db.update(seats).set({ leftAt: new Date() }).where(eq(seats.id, seat.seat.id)).run();
+    const left = { ...seat, seat: { ...seat.seat, leftAt: new Date() } };
+    deliver(left, []);
+    expect(seatsThatOwe(scene.db, scene.profileId)).toEqual([]);
+    deliver(left, [op(score(10))]);
+    expect(seatsThatOwe(scene.db, scene.profileId)).toEqual([1]);
   });
 });

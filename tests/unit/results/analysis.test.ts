@@ -19,7 +19,7 @@ function glassesFor(seats: number, samples: number, blocks: number): GlassFact[]
 
 function scoresOf(glasses: readonly GlassFact[], value: (glass: GlassFact, index: number) => number): OperationFact[] {
   return glasses.map((glass, index) => ({
-    seatId: glass.seatId, generation: 1, seq: index + 1, receiptNo: index + 1, kind: 'score', block: glass.block, position: glass.position, item: 1,
+    seatId: glass.seatId, tokenGeneration: 1, seq: index + 1, receiptNo: index + 1, kind: 'score', block: glass.block, position: glass.position, item: 1,
     number: value(glass, index), text: null, isGuess: null, isLate: false,
   }));
 }
@@ -92,11 +92,11 @@ describe('a profile line from any scores', () => {
 
 describe('counting', () => {
   const op = (more: Partial<OperationFact>): OperationFact => ({
-    seatId: 'seat1', generation: 1, seq: 1, receiptNo: 1, kind: 'score', block: 1, position: 1, item: 1, number: 50, text: null, isGuess: null, isLate: false, ...more,
+    seatId: 'seat1', tokenGeneration: 1, seq: 1, receiptNo: 1, kind: 'score', block: 1, position: 1, item: 1, number: 50, text: null, isGuess: null, isLate: false, ...more,
   });
 
   it('gives the same answer whatever the order of receipt', () => {
-    const ops = [op({ seq: 1, number: 10 }), op({ seq: 2, kind: 'clear', number: null }), op({ seq: 3, number: 30 }), op({ seq: 1, generation: 2, number: 70 })];
+    const ops = [op({ seq: 1, number: 10 }), op({ seq: 2, kind: 'clear', number: null }), op({ seq: 3, number: 30 }), op({ seq: 1, tokenGeneration: 2, number: 70 })];
     fc.assert(
       fc.property(fc.shuffledSubarray(ops, { minLength: ops.length }), (order) => {
         const { scores, replaced, cleared } = countAnswers(order.map((one, i) => ({ ...one, receiptNo: i + 1 })));
