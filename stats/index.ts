@@ -7,5 +7,7 @@ export * from './ranks';
 export * from './categories';
 export * from './structure';
 export * from './anova';
+export * from './mixed';
 export * from './comparisons';
 export * from './panel';
+export * from './cellar';

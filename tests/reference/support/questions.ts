@@ -16,6 +16,7 @@ const QUESTIONS: Readonly<Record<string, Readonly<Record<string, readonly string
   '04': { '*': ['d_prime'], rows: ['method', 'x', 'n'] },
   '06': { rows: ['k', 'n'], page: ['predicted_order_lowest_first'] },
   '07': { rows: ['b', 'c'] },
+  '15': { rows: ['t', 'k', 'r'] },
   '16': {
     molecular: ['free_mg_L', 'pH', 'pKa'],
     free_needed: ['target_molecular_mg_L', 'pH', 'pKa'],

@@ -1,0 +1,5 @@
+export * from './sulphur-dioxide';
+export * from './alcohol';
+export * from './blend';
+export * from './conversions';
+export * from './trend';
