@@ -13,6 +13,7 @@ export default defineConfig({
   plugins: [react()],
   resolve: { alias },
   test: {
+    reporters: ['default', './tests/support/closing-line.ts'],
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'], testTimeout: 20_000 } },
       {

@@ -31,7 +31,7 @@ function step(name, work) {
 
 function vitest(project) {
   const file = path.join(reports, `${project}.json`);
-  const isGood = run(process.execPath, [bin('vitest/vitest.mjs'), 'run', '--project', project, '--reporter=default', '--reporter=json', `--outputFile.json=${file}`]);
+  const isGood = run(process.execPath, [bin('vitest/vitest.mjs'), 'run', '--project', project, '--reporter=default', '--reporter=./tests/support/closing-line.ts', '--reporter=json', `--outputFile.json=${file}`]);
   if (!existsSync(file)) return false;
   const { numPassedTests, numFailedTests } = JSON.parse(readFileSync(file, 'utf8'));
   // A file that doesn't even load counts no test: the exit code tells of it.

@@ -88,13 +88,17 @@ export function mixAlcohol(parts: readonly AlcoholPart[]): { abv: number; volume
   return { volume, abv: (100 * ethanol) / (ETHANOL_DENSITY * volume) };
 }
 
+/** Density of ethanol in g/mL as drinks are reckoned (handbook value, rounded). */
+const ETHANOL_G_PER_ML = 0.789;
+
 /**
- * Grams of ethanol in a flight if all of it is swallowed: glasses × millilitres × abv / 100 × 0.789 g/mL.
+ * Ethanol in a flight if all of it is swallowed: millilitres of pure ethanol, and grams at 0.789 g/mL.
  * Tasters are meant to spit; this is the figure to set beside the drive home. Throws on negative numbers.
  */
-export function flightEthanol({ glasses, millilitres, abv }: { glasses: number; millilitres: number; abv: number }): number {
+export function flightEthanol({ glasses, millilitres, abv }: { glasses: number; millilitres: number; abv: number }): { millilitres: number; grams: number } {
   requireNotNegative(glasses, 'Number of glasses');
   requireNotNegative(millilitres, 'Millilitres per glass');
   requireBetween(abv, 'Alcohol', 0, 100, '% vol');
-  return (glasses * millilitres * abv * (ETHANOL_DENSITY / 1000)) / 100;
+  const pure = (glasses * millilitres * abv) / 100;
+  return { millilitres: pure, grams: pure * ETHANOL_G_PER_ML };
 }

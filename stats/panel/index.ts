@@ -5,3 +5,6 @@ export { krippendorffAlpha, type KrippendorffAlpha, type Metric } from './krippe
 export { linConcordance, type LinConcordance } from './lin';
 export { rvCoefficient } from './rv';
 export { steadyMean } from './steady-mean';
+export { fleissKappa, type FleissKappa } from './fleiss-kappa';
+export { scaleUse, type ScaleUse } from './scale-use';
+export { drift, servingEffect, type Drift, type ServedScores, type ServingEffect } from './serving-effect';

@@ -1,6 +1,7 @@
 import { resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { afterAll, describe, expect, it } from 'vitest';
+import { describe, expect, it } from 'vitest';
+import { getCurrentTest } from 'vitest/suite';
 import { loadAnswerers } from './support/answerers';
 import { compare } from './support/compare';
 import { csvLoader, deepFreeze, readCases } from './support/load';
@@ -16,30 +17,19 @@ const load = csvLoader(folder, own);
 const answerers = await loadAnswerers();
 const files = readCases(folder);
 
-let cases = 0;
-let values = 0;
-let wrong = 0;
-
-for (const { file, cases: list } of files) {
+for (const { file, cases } of files) {
   describe(file, () => {
-    it.each(list.map((c, i) => [`${i + 1}. ${c.case}`, c] as const))('%s', (_, c) => {
-      cases += 1;
+    it.each(cases.map((c, i) => [`${i + 1}. ${c.case}`, c] as const))('%s', (_, c) => {
+      const { meta } = getCurrentTest()!;
+      meta.compared = { of: 'Reference', values: 0, differs: true };
       const { expected, ...open } = c;
       const input = deepFreeze({ ...structuredClone(open), file, given: questionsOf(file, expected) });
       const answerer = answerers.find((a) => a.matches(input));
-      if (!answerer) {
-        wrong += 1;
-        throw new Error('No answering code recognises this case');
-      }
-      const { values: compared, failures } = compare(expected, answerer.answer(input, load), c.tolerance);
-      values += compared;
-      if (failures.length > 0) wrong += 1;
-      expect(failures.slice(0, 12), `${failures.length} of ${compared} values differ`).toEqual([]);
-      expect(compared).toBeGreaterThan(0);
+      if (!answerer) throw new Error('No answering code recognises this case');
+      const { values, failures } = compare(expected, answerer.answer(input, load), c.tolerance);
+      meta.compared = { of: 'Reference', values, differs: failures.length > 0 };
+      expect(failures.slice(0, 12), `${failures.length} of ${values} values differ`).toEqual([]);
+      expect(values).toBeGreaterThan(0);
     });
   });
 }
-
-afterAll(() => {
-  console.log(`Reference: ${cases} cases compared, ${values} values, ${wrong} cases with differences`);
-});
