@@ -12,39 +12,44 @@ import { StatsError } from '../errors';
 export function compactLetters(means: ArrayLike<number>, shown: Iterable<readonly [number, number]>): string[] {
   requireFiniteArray(means, 'means');
   const k = means.length;
-  let groups: Set<number>[] = [new Set(Array.from({ length: k }, (_, i) => i))];
+  let groups: Uint8Array[] = [new Uint8Array(k).fill(1)];
   for (const [a, b] of shown) {
     if (!(a >= 0 && a < k && b >= 0 && b < k && a !== b)) throw new StatsError('out_of_range', 'A pair names a product that is not there');
-    groups = groups.flatMap((group) => (group.has(a) && group.has(b) ? [without(group, a), without(group, b)] : [group]));
-    groups = absorb(groups);
+    groups = split(groups, a, b);
   }
   const rank = Array.from({ length: k }, (_, i) => i).sort((x, y) => means[y] - means[x] || x - y);
-  const placeOf = new Map(rank.map((product, place) => [product, place]));
-  const key = (group: Set<number>) => [...group].map((product) => placeOf.get(product) ?? 0).sort((x, y) => x - y);
-  const ordered = groups.map((group) => ({ group, places: key(group) })).sort((x, y) => compareLists(x.places, y.places));
+  const ordered = groups.map((group) => ({ places: rank.flatMap((product, place) => (group[product] ? [place] : [])) })).sort((x, y) => compareLists(x.places, y.places));
   const letters = Array.from({ length: k }, () => '');
-  ordered.forEach(({ group }, index) => {
-    for (const product of group) letters[product] += letterOf(index);
+  ordered.forEach(({ places }, index) => {
+    for (const place of places) letters[rank[place]] += letterOf(index);
   });
   return letters;
 }
 
 const letterOf = (index: number): string => String.fromCharCode(97 + (index % 26)) + (index >= 26 ? String(Math.floor(index / 26)) : '');
 
-function without(group: Set<number>, product: number): Set<number> {
-  const rest = new Set(group);
-  rest.delete(product);
+/**
+ * Splits each group that holds both a and b into one without a and one without b. A new group goes if
+ * another holds it wholly; the groups that stayed can't have become part of one.
+ */
+function split(groups: Uint8Array[], a: number, b: number): Uint8Array[] {
+  if (!groups.some((group) => group[a] && group[b])) return groups;
+  const stayed = groups.filter((group) => !(group[a] && group[b]));
+  const made = groups.flatMap((group) => (group[a] && group[b] ? [without(group, a), without(group, b)] : []));
+  const needed = made.filter(
+    (group, i) => !stayed.some((other) => holds(other, group)) && !made.some((other, j) => i !== j && holds(other, group) && (j < i || !holds(group, other))),
+  );
+  return [...stayed, ...needed];
+}
+
+function without(group: Uint8Array, product: number): Uint8Array {
+  const rest = group.slice();
+  rest[product] = 0;
   return rest;
 }
 
-/** Drops each group that another one holds wholly. */
-function absorb(groups: Set<number>[]): Set<number>[] {
-  return groups.filter((group, i) => !groups.some((other, j) => i !== j && holds(other, group) && (other.size > group.size || j < i)));
-}
-
-function holds(larger: Set<number>, smaller: Set<number>): boolean {
-  if (smaller.size > larger.size) return false;
-  for (const product of smaller) if (!larger.has(product)) return false;
+function holds(larger: Uint8Array, smaller: Uint8Array): boolean {
+  for (let product = 0; product < smaller.length; product += 1) if (smaller[product] && !larger[product]) return false;
   return true;
 }
 

@@ -1,5 +1,5 @@
 import { requireFinite, requireFiniteArray, requireProbability } from '../check';
-import { studentizedRangeQuantile, studentizedRangeSf, tQuantile, tTwoSided } from '../distributions';
+import { studentizedRangeQuantile, studentizedRangeTail, tQuantile, tTwoSided } from '../distributions';
 import { StatsError } from '../errors';
 
 export interface PairQuestion {
@@ -76,7 +76,8 @@ export function tukeyComparisons(question: PairQuestion): Comparisons {
   requireQuestion(question);
   const k = question.means.length;
   const q = studentizedRangeQuantile(1 - question.alpha, k, question.df);
-  return compare(question, q, q / Math.SQRT2, (t) => studentizedRangeSf(t * Math.SQRT2, k, question.df));
+  const sf = studentizedRangeTail(k, question.df);
+  return compare(question, q, q / Math.SQRT2, (t) => sf(t * Math.SQRT2));
 }
 
 /**

@@ -2,6 +2,7 @@ import betainc from '@stdlib/math-base-special-betainc';
 import quantile from '@stdlib/stats-base-dists-f-quantile';
 import { requireClosedProbability, requireDf, requireNumber } from './arguments';
 import { chiSquareCdf, chiSquareQuantile, chiSquareSf } from './chi-square';
+import { remember } from './remember';
 
 function tail(f: number, df1: number, df2: number, upper: boolean): number {
   requireNumber(f, 'F');
@@ -37,6 +38,7 @@ export function fCdf(f: number, df1: number, df2: number): number {
 /**
  * Quantile of Fisher's F: the f with P(F ≤ f) = p, p in [0, 1].
  * Throws on p outside [0, 1], NaN, df ≤ 0. Relative error below 1e-11.
+ * The last 256 answers are kept.
  */
 export function fQuantile(p: number, df1: number, df2: number): number {
   requireClosedProbability(p);
@@ -47,5 +49,7 @@ export function fQuantile(p: number, df1: number, df2: number): number {
   if (df1 === Infinity && df2 === Infinity) return 1;
   if (df2 === Infinity) return chiSquareQuantile(p, df1) / df1;
   if (df1 === Infinity) return df2 / chiSquareQuantile(1 - p, df2);
-  return quantile(p, df1, df2);
+  return solved(p, df1, df2);
 }
+
+const solved = remember(256, quantile);

@@ -6,4 +6,4 @@ export { chiSquareCdf, chiSquareQuantile, chiSquareSf } from './chi-square';
 export { betaCdf, betaQuantile, betaSf } from './beta';
 export { binomialCdf, binomialPmf, binomialSf } from './binomial';
 export { gaussLegendre, type Quadrature } from './quadrature';
-export { studentizedRangeCdf, studentizedRangeQuantile, studentizedRangeSf } from './studentized-range';
+export { studentizedRangeCdf, studentizedRangeQuantile, studentizedRangeSf, studentizedRangeTail } from './studentized-range';

@@ -1,4 +1,5 @@
 import erfc from '@stdlib/math-base-special-erfc';
+import { UnitTable } from './chebyshev';
 
 const LOW = -8.75;
 const HIGH = 32;
@@ -53,25 +54,24 @@ function integrate(w: number, k: number, upper: boolean): number {
 
 /** Past this width the tail is below 1e-270; the table ends. */
 const WIDEST = 50;
-const DEGREE = 16;
 
-/** Chebyshev coefficients of the logarithm of a tail on [i, i + 1), made when first asked for. */
-type Table = (Float64Array | undefined)[];
-const tables = new Map<number, Table>();
+/** Logarithms of the tails, by k; lower tails under −k. */
+const tables = new Map<number, UnitTable>();
 
-function fit(cell: number, k: number, upper: boolean): Float64Array {
-  const values = new Float64Array(DEGREE);
-  for (let i = 0; i < DEGREE; i += 1) {
-    const w = cell + 0.5 + 0.5 * Math.cos((Math.PI * (i + 0.5)) / DEGREE);
-    values[i] = Math.log(integrate(w, k, upper));
+function tableOf(k: number, upper: boolean): UnitTable {
+  const key = upper ? k : -k;
+  let table = tables.get(key);
+  if (!table) {
+    table = new UnitTable((w) => Math.log(integrate(w, k, upper)));
+    tables.set(key, table);
   }
-  const coefficients = new Float64Array(DEGREE);
-  for (let j = 0; j < DEGREE; j += 1) {
-    let sum = 0;
-    for (let i = 0; i < DEGREE; i += 1) sum += values[i] * Math.cos((Math.PI * j * (i + 0.5)) / DEGREE);
-    coefficients[j] = ((j === 0 ? 1 : 2) * sum) / DEGREE;
-  }
-  return coefficients;
+  return table;
+}
+
+function read(table: UnitTable, w: number, k: number, upper: boolean): number {
+  if (w >= WIDEST) return upper ? 0 : 1;
+  const log = table.at(w);
+  return Math.min(1, upper ? Math.exp(log) : Math.exp(log + (k - 1) * Math.log(w)));
 }
 
 /**
@@ -80,23 +80,13 @@ function fit(cell: number, k: number, upper: boolean): Float64Array {
  * Answers come from a table that is filled piece by piece as widths are asked for.
  */
 export function normalRangeTail(w: number, k: number, upper: boolean): number {
-  if (w >= WIDEST) return upper ? 0 : 1;
-  const key = upper ? k : -k;
-  let table = tables.get(key);
-  if (!table) {
-    table = new Array<Float64Array | undefined>(WIDEST).fill(undefined);
-    tables.set(key, table);
-  }
-  const cell = Math.floor(w);
-  const c = (table[cell] ??= fit(cell, k, upper));
-  const x = 2 * (w - cell) - 1;
-  let b1 = 0;
-  let b2 = 0;
-  for (let j = DEGREE - 1; j >= 1; j -= 1) {
-    const b0 = 2 * x * b1 - b2 + c[j];
-    b2 = b1;
-    b1 = b0;
-  }
-  const log = x * b1 - b2 + c[0];
-  return Math.min(1, upper ? Math.exp(log) : Math.exp(log + (k - 1) * Math.log(w)));
+  return read(tableOf(k, upper), w, k, upper);
+}
+
+/** Σ mass_i · normalRangeTail(q · scale_i): the tail averaged over a scale. */
+export function meanRangeTail(q: number, scale: Float64Array, mass: Float64Array, k: number, upper: boolean): number {
+  const table = tableOf(k, upper);
+  let sum = 0;
+  for (let i = 0; i < scale.length; i += 1) sum += mass[i] * read(table, q * scale[i], k, upper);
+  return sum;
 }

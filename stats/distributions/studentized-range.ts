@@ -1,9 +1,11 @@
 import { requireInteger } from '../check';
 import { StatsError } from '../errors';
 import { requireClosedProbability, requireDf, requireNumber } from './arguments';
+import { UnitTable } from './chebyshev';
 import { logGamma } from './gamma';
 import { normalQuantile } from './normal';
-import { normalRangeTail } from './normal-range';
+import { meanRangeTail, normalRangeTail } from './normal-range';
+import { remember } from './remember';
 import { tQuantile, tTwoSided } from './t';
 
 /** Largest number of means the quadrature is made for. */
@@ -15,23 +17,25 @@ interface Scale {
   readonly mass: Float64Array;
 }
 
+/** Rules by df, the wide-stepped ones under −df. */
 const scales = new Map<number, Scale>();
 const KEEP = 64;
 
 /**
  * A trapezoidal rule for the scale s with density 2 (df/2)^(df/2) / Γ(df/2) s^(df−1) exp(−df s²/2),
  * on the variable x of ln s = x − exp(−x) + 1 for few degrees of freedom (which makes the left tail fall
- * doubly exponentially) and on ln s itself for many.
+ * doubly exponentially) and on ln s itself for many. The tail of the range multiplies the density and narrows
+ * it, the more the larger q and k: `wide` steps do for moderate ones (to 1e-12, found by comparing the two).
  */
-function scaleRule(df: number): Scale {
-  const kept = scales.get(df);
+function scaleRule(df: number, wide: boolean): Scale {
+  const key = wide ? -df : df;
+  const kept = scales.get(key);
   if (kept) return kept;
-  const few = df < 12;
+  const few = df < FEW;
   const constant = Math.LN2 + (df / 2) * Math.log(df / 2) - logGamma(df / 2);
   const width = 1 / Math.sqrt(2 * df);
-  // The tail of the range multiplies the density and narrows it: steps are finer than the density needs.
-  const step = few ? Math.min(0.035, 0.12 * width) : 0.2 * width;
-  const floor = -64;
+  const step = few ? Math.min(0.035, 0.12 * width) : (wide ? 0.5 : 0.2) * width;
+  const floor = wide ? -50 : -64;
   const at: number[] = [];
   const mass: number[] = [];
   const add = (x: number): boolean => {
@@ -46,19 +50,21 @@ function scaleRule(df: number): Scale {
   for (let x = -step; add(x); x -= step);
   const rule = { at: Float64Array.from(at), mass: Float64Array.from(mass) };
   if (scales.size >= KEEP) scales.delete(scales.keys().next().value as number);
-  scales.set(df, rule);
+  scales.set(key, rule);
   return rule;
 }
+
+/** Below this many degrees of freedom the density of ln s is too skew for the plain rule. */
+const FEW = 12;
 
 function tail(q: number, k: number, df: number, upper: boolean): number {
   if (q <= 0) return upper ? 1 : 0;
   if (q === Infinity) return upper ? 0 : 1;
   if (k === 2 && upper) return tTwoSided(q * Math.SQRT1_2, df);
   if (df === Infinity) return normalRangeTail(q, k, upper);
-  const { at, mass } = scaleRule(df);
-  let sum = 0;
-  for (let i = 0; i < at.length; i += 1) sum += mass[i] * normalRangeTail(q * at[i], k, upper);
-  return Math.min(1, sum);
+  const wide = upper && df >= 2 * FEW && k <= 30 && q <= 14 && q * q <= 2 * df;
+  const { at, mass } = scaleRule(df, wide);
+  return Math.min(1, meanRangeTail(q, at, mass, k, upper));
 }
 
 function check(k: number, df: number): void {
@@ -79,6 +85,32 @@ export function studentizedRangeSf(q: number, k: number, df: number): number {
   return tail(q, k, df, true);
 }
 
+/** Past this q the table ends, and the tail is computed. */
+const TABLE_END = 40;
+const tailTables = new Map<string, UnitTable>();
+
+/**
+ * {@link studentizedRangeSf} for many q of one k and df: the same tail read from a table that is filled as it
+ * is asked. Agrees with it to 2e-10 (1e-11 from four degrees of freedom on), at a hundredth of the time.
+ */
+export function studentizedRangeTail(k: number, df: number): (q: number) => number {
+  check(k, df);
+  if (k === 2) return (q) => studentizedRangeSf(q, k, df);
+  const key = `${k}/${df}`;
+  let table = tailTables.get(key);
+  if (!table) {
+    table = new UnitTable((q) => Math.log(tail(q, k, df, true)));
+    if (tailTables.size >= KEEP) tailTables.delete(tailTables.keys().next().value as string);
+    tailTables.set(key, table);
+  }
+  const kept = table;
+  return (q) => {
+    requireNumber(q, 'q');
+    if (q <= 0 || q >= TABLE_END) return tail(q, k, df, true);
+    return Math.min(1, Math.exp(kept.at(q)));
+  };
+}
+
 /** Distribution function of the studentized range, P(Q ≤ q). Domain and errors as {@link studentizedRangeSf}. */
 export function studentizedRangeCdf(q: number, k: number, df: number): number {
   requireNumber(q, 'q');
@@ -86,9 +118,6 @@ export function studentizedRangeCdf(q: number, k: number, df: number): number {
   const above = tail(q, k, df, true);
   return above < 0.5 ? 1 - above : tail(q, k, df, false);
 }
-
-const quantiles = new Map<string, number>();
-const KEEP_QUANTILES = 512;
 
 /**
  * Quantile of the studentized range: the q with P(Q ≤ q) = p, p in [0, 1), k and df as
@@ -101,17 +130,7 @@ export function studentizedRangeQuantile(p: number, k: number, df: number): numb
   if (p === 0) return 0;
   if (p === 1) return Infinity;
   if (k === 2) return Math.SQRT2 * tQuantile((1 + p) / 2, df);
-  const key = `${p}/${k}/${df}`;
-  const kept = quantiles.get(key);
-  if (kept !== undefined) {
-    quantiles.delete(key);
-    quantiles.set(key, kept);
-    return kept;
-  }
-  const q = solve(p, k, df);
-  if (quantiles.size >= KEEP_QUANTILES) quantiles.delete(quantiles.keys().next().value as string);
-  quantiles.set(key, q);
-  return q;
+  return solved(p, k, df);
 }
 
 /** Secant steps, kept inside a bracket, on the logarithm of the smaller tail against ln q. */
@@ -153,3 +172,5 @@ function solve(p: number, k: number, df: number): number {
   }
   throw new StatsError('no_convergence', 'The studentized range quantile did not settle');
 }
+
+const solved = remember(512, solve);

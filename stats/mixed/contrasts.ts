@@ -104,12 +104,19 @@ export function modelComparisons(model: ProfileModel, { alpha, method }: { alpha
   requireProbability(alpha, 'alpha');
   const k = model.products;
   const pairs: ModelPair[] = [];
+  // Complete data give all pairs the same df but for rounding: one critical value then does.
+  let known = { df: NaN, q: NaN };
+  const criticalAt = (df: number): number => {
+    if (!(Math.abs(df - known.df) <= 1e-12 * df)) known = { df, q: studentizedRangeQuantile(1 - alpha, k, df) };
+    return known.q;
+  };
   for (let first = 0; first < k; first += 1) {
     for (let second = first + 1; second < k; second += 1) {
       const { estimate, standardError, df } = contrastOf(model, unit(k, second, first), method);
       const t = Math.abs(estimate) / standardError;
-      const p = studentizedRangeSf(t * Math.SQRT2, k, Math.max(1, df));
-      const reach = (studentizedRangeQuantile(1 - alpha, k, Math.max(1, df)) / Math.SQRT2) * standardError;
+      const rangeDf = Math.max(1, df);
+      const reach = (criticalAt(rangeDf) / Math.SQRT2) * standardError;
+      const p = studentizedRangeSf(t * Math.SQRT2, k, known.df);
       pairs.push({ first, second, difference: estimate, standardError, df, p, pUnadjusted: tTwoSided(t, df), low: estimate - reach, high: estimate + reach, isShown: p <= alpha });
     }
   }

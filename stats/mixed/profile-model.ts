@@ -92,23 +92,47 @@ function requireSpread({ means, counts, filled, within, scores, products, assess
   if (!hasInteraction && filled > 0 && size === 0) throw new StatsError('constant', 'All scores are the same');
 }
 
-/** Mean squares about plain product means, split evenly: where the search starts. */
+/** Variances by the method of moments on cell means, where the search starts: with complete data they are the answer. */
 function start(table: CellTable, active: readonly number[]): Variances {
-  const { means, counts, products: J } = table;
-  let ss = 0;
-  for (let j = 0; j < J; j += 1) {
-    let n = 0;
-    let sum = 0;
-    for (let cell = j; cell < means.length; cell += J) {
-      n += counts[cell];
-      sum += counts[cell] * means[cell];
+  const { means, counts, assessors: I, products: J } = table;
+  const filled = (i: number, j: number) => counts[i * J + j] > 0;
+  const centre = Float64Array.from({ length: J }, (_, j) => meanOver(I, (i) => (filled(i, j) ? means[i * J + j] : null)));
+  let ssAssessor = 0;
+  let ssRest = 0;
+  let present = 0;
+  let reciprocals = 0;
+  for (let i = 0; i < I; i += 1) {
+    const own = meanOver(J, (j) => (filled(i, j) ? means[i * J + j] - centre[j] : null));
+    if (Number.isNaN(own)) continue;
+    present += 1;
+    for (let j = 0; j < J; j += 1) {
+      if (!filled(i, j)) continue;
+      ssAssessor += own ** 2;
+      ssRest += (means[i * J + j] - centre[j] - own) ** 2;
+      reciprocals += 1 / counts[i * J + j];
     }
-    for (let cell = j; cell < means.length; cell += J) ss += counts[cell] * (means[cell] - sum / n) ** 2;
   }
-  const spread = Math.max(ss / Math.max(1, table.filled - J), table.within / Math.max(1, table.scores - table.filled));
+  const rest = ssRest / Math.max(1, table.filled - present - J + 1);
+  const withInteraction = active.length === COMPONENTS;
+  const residual = withInteraction ? table.within / (table.scores - table.filled) : ((rest * table.filled) / reciprocals || 0);
+  const spread = rest + ssAssessor + residual;
   if (spread <= 0) throw new StatsError('constant', 'Assessors differ in nothing but the products’ means, so there is no error to judge differences by');
-  const residual = active.length === COMPONENTS ? table.within / (table.scores - table.filled) : spread / 2;
-  return [spread / 3, active.length === COMPONENTS ? spread / 3 : 0, residual];
+  const least = 1e-3 * spread;
+  const interaction = withInteraction ? Math.max(least, rest - (residual * reciprocals) / table.filled) : 0;
+  const assessor = Math.max(least, (ssAssessor / (present - 1) - rest) / (table.filled / present));
+  return [assessor, interaction, Math.max(least * 1e-3, residual)];
+}
+
+function meanOver(n: number, value: (at: number) => number | null): number {
+  let sum = 0;
+  let count = 0;
+  for (let at = 0; at < n; at += 1) {
+    const own = value(at);
+    if (own === null) continue;
+    sum += own;
+    count += 1;
+  }
+  return count === 0 ? NaN : sum / count;
 }
 
 function maximise(table: CellTable, patterns: readonly Pattern[], active: readonly number[]): { at: Likelihood; derivatives: Derivatives } {
@@ -118,6 +142,9 @@ function maximise(table: CellTable, patterns: readonly Pattern[], active: readon
     // A variance at 0 whose likelihood falls away from 0 stays there.
     const free = active.filter((k) => at.variances[k] > 0 || derivatives.score[k] > 0);
     const move = direction(derivatives, free);
+    // What the step could still gain is beyond the digits of the likelihood.
+    const gain = free.reduce((sum, k, f) => sum + move[f] * derivatives.score[k], 0);
+    if (Math.abs(gain) < 1e-22) return { at, derivatives };
     const next = lineSearch(table, patterns, at, free, move);
     if (!next) return { at, derivatives };
     const moved = Math.max(...free.map((k) => Math.abs(next.variances[k] - at.variances[k]) / Math.max(next.variances[k], 1e-9 * next.variances[2])));

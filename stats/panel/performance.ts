@@ -3,7 +3,7 @@ import { cellMeans } from '../anova/cell-means';
 import { fSf } from '../distributions';
 import { midranks } from '../ranks/midranks';
 import { pearson } from './pearson';
-import { steadyMean } from './steady-mean';
+import { steadyMeanOf } from './steady-mean';
 
 /** How one assessor did on one descriptor. Units: the score's, squared for mean squares. */
 export interface AssessorPerformance {
@@ -41,7 +41,7 @@ export function assessorPerformance(table: BalancedScores): AssessorPerformance[
   const { assessorMeans, productMeans } = cellMeans(table);
   // Ranks hang on ties, so these means are summed to the last digit.
   const cells = new Float64Array(I * J);
-  for (let cell = 0; cell < I * J; cell += 1) cells[cell] = steadyMean(Array.from({ length: K }, (_, k) => scores[cell * K + k]));
+  for (let cell = 0; cell < I * J; cell += 1) cells[cell] = steadyMeanOf(K, (k) => scores[cell * K + k]);
   const own = new Float64Array(J);
   const others = new Float64Array(J);
   const perAssessor = J * K;
@@ -55,7 +55,7 @@ export function assessorPerformance(table: BalancedScores): AssessorPerformance[
     for (let j = 0; j < J; j += 1) {
       const cell = cells[i * J + j];
       own[j] = cell;
-      others[j] = steadyMean(Array.from({ length: I - 1 }, (_, k) => cells[(k < i ? k : k + 1) * J + j]));
+      others[j] = steadyMeanOf(I - 1, (k) => cells[(k < i ? k : k + 1) * J + j]);
       ssProduct += (cell - mean) ** 2;
       for (let k = 0; k < K; k += 1) {
         const score = scores[(i * J + j) * K + k];

@@ -9,19 +9,24 @@ function productError(a: number, b: number, product: number): number {
 }
 
 /**
- * Mean rounded once: Neumaier's compensated sum, divided with the remainder carried on. Means of the
- * same scores in another order come out equal and tie, as they should. An empty list gives NaN.
+ * Mean of value(0) … value(count − 1), rounded once: Neumaier's compensated sum, divided with the remainder
+ * carried on. Means of the same scores in another order come out equal and tie, as they should. No values give NaN.
  */
-export function steadyMean(values: readonly number[]): number {
+export function steadyMeanOf(count: number, value: (at: number) => number): number {
   let sum = 0;
   let lost = 0;
-  for (const value of values) {
-    const next = sum + value;
-    lost += Math.abs(sum) >= Math.abs(value) ? sum - next + value : value - next + sum;
+  for (let at = 0; at < count; at += 1) {
+    const own = value(at);
+    const next = sum + own;
+    lost += Math.abs(sum) >= Math.abs(own) ? sum - next + own : own - next + sum;
     sum = next;
   }
-  const n = values.length;
-  const mean = sum / n;
-  const product = mean * n;
-  return mean + (sum - product - productError(mean, n, product) + lost) / n;
+  const mean = sum / count;
+  const product = mean * count;
+  return mean + (sum - product - productError(mean, count, product) + lost) / count;
+}
+
+/** {@link steadyMeanOf} a list. */
+export function steadyMean(values: ArrayLike<number>): number {
+  return steadyMeanOf(values.length, (at) => values[at]);
 }

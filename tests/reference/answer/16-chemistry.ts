@@ -47,12 +47,14 @@ export const answers: Answerer[] = [
     matches: (c) => has(c, 'temperature_C') && Array.isArray(c.inputs.pH),
     answer({ inputs, given }) {
       const { temperature_C, abv } = given as { temperature_C: number[]; abv: number[] };
+      // Keys are printed with as many decimals as the longest needs.
+      const decimals = Math.max(...(inputs.pH as number[]).map((pH) => (String(pH).split('.')[1] ?? '').length));
       const table = <T>(cell: (pKa: number) => T) => abv.map((strength) => temperature_C.map((t) => cell(so2Pka(t, strength).pKa)));
       return {
         temperature_C,
         abv,
         pkT: table((pKa) => pKa),
-        percent_molecular_at_pH: Object.fromEntries((inputs.pH as number[]).map((pH) => [pH.toFixed(1), table((pKa) => 100 * molecularShare(pH, pKa))])),
+        percent_molecular_at_pH: Object.fromEntries((inputs.pH as number[]).map((pH) => [pH.toFixed(decimals), table((pKa) => 100 * molecularShare(pH, pKa))])),
       };
     },
   },
