@@ -1,4 +1,4 @@
-export * from './mcnemar';
+export { mcnemar, mcnemarOfAnswers, type McnemarResult } from './mcnemar';
 export * from './cochran-q';
 export * from './wilcoxon';
 export * from './just-about-right';

@@ -1,5 +1,5 @@
+import { requireBetween, requireNotNegative, requirePositive } from '../check';
 import { StatsError } from '../errors';
-import { requireBetween, requireNotNegative, requirePositive } from './ranges';
 
 /**
  * Coefficients A1…A12 of the density of ethanol–water at 20 °C, kg/m³ by mass fraction.

@@ -1,6 +1,5 @@
-import { requireFinite, requireFiniteArray } from '../check';
+import { requireFinite, requireFiniteArray, requireNotNegative, requirePositive } from '../check';
 import { StatsError } from '../errors';
-import { requireNotNegative, requirePositive } from './ranges';
 
 /**
  * Volume-weighted mean Σ v x / Σ v: exact mass balance for what stays what it is in a blend (total

@@ -1,5 +1,5 @@
+import { requireNotNegative, requirePositive } from '../check';
 import { StatsError } from '../errors';
-import { requireNotNegative, requirePositive } from './ranges';
 
 /** Molar masses in g/mol (handbook values, from memory). */
 const MOLAR = { so2: 64.066, metabisulphite: 222.32, tartaric: 150.087, acetic: 60.052, sulphuric: 98.079 } as const;

@@ -1,5 +1,5 @@
+import { requireBetween, requireNotNegative } from '../check';
 import { locate } from './interpolation';
-import { requireBetween, requireNotNegative } from './ranges';
 
 /** The customary first pKa of sulphurous acid: water, about 20 °C (textbooks of enology, from memory). */
 export const CUSTOMARY_PKA = 1.81;

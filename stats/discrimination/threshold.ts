@@ -1,5 +1,5 @@
 import { StatsError } from '../errors';
-import { requirePositive } from '../distributions/gamma';
+import { requirePositive } from '../check';
 
 /** Detection threshold of a panel from an ascending series. */
 export interface Threshold {

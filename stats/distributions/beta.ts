@@ -1,7 +1,7 @@
 import betainc from '@stdlib/math-base-special-betainc';
 import quantile from '@stdlib/stats-base-dists-beta-quantile';
 import { requireClosedProbability, requireNumber } from './arguments';
-import { requirePositive } from './gamma';
+import { requirePositive } from '../check';
 
 function tail(x: number, a: number, b: number, upper: boolean): number {
   requireNumber(x, 'x');

@@ -1,13 +1,6 @@
 import betaln from '@stdlib/math-base-special-betaln';
 import gammaln from '@stdlib/math-base-special-gammaln';
-import { requireFinite, requireInteger } from '../check';
-import { StatsError } from '../errors';
-
-/** Throws unless `x` is a finite number above zero. */
-export function requirePositive(x: number, name: string): void {
-  requireFinite(x, name);
-  if (x <= 0) throw new StatsError('out_of_range', `${name} must be above zero`);
-}
+import { requireInteger, requirePositive } from '../check';
 
 /**
  * Natural logarithm of the gamma function, ln Γ(x), for x > 0.

@@ -155,6 +155,11 @@ function satterthwaite(model: ProfileModel, differences: Matrix): ProductTest {
 
 function kenwardRoger(model: ProfileModel, differences: Matrix): ProductTest {
   const q = differences.rows;
+  if (q === 1) {
+    // One difference: F is t² of the adjusted standard error, and needs no scaling.
+    const { estimate, standardError, df } = contrastOf(model, Float64Array.from(differences.getRow(0)), 'kenward_roger');
+    return test((estimate / standardError) ** 2, 1, df, 1);
+  }
   const turned = differences.transpose();
   const theta = turned.mmul(solve(differences.mmul(model.covariance).mmul(turned), differences));
   const parts = model.sensitivities.map((matrix) => theta.mmul(matrix));
@@ -173,11 +178,13 @@ function kenwardRoger(model: ProfileModel, differences: Matrix): ProductTest {
   const b = (a1 + 6 * a2) / (2 * q);
   const g = ((q + 1) * a1 - (q + 4) * a2) / ((q + 2) * a2);
   const base = 3 * q + 2 * (1 - g);
-  const mean = 1 / (1 - a2 / q);
-  const variance = ((2 / q) * (1 + (g / base) * b)) / ((1 - ((q - g) / base) * b) ** 2 * (1 - ((q + 2 - g) / base) * b));
-  const rho = variance / (2 * mean ** 2);
+  // ρ = V* / 2E*² and the scaling are 0/0 where the denominator has two degrees of freedom; both are 1 there.
+  const inverseMean = 1 - a2 / q;
+  const spread = 1 - ((q - g) / base) * b;
+  const ratio = Math.abs(inverseMean) < 1e-9 && Math.abs(spread) < 1e-9 ? 1 : inverseMean / spread;
+  const rho = ((ratio ** 2 / q) * (1 + (g / base) * b)) / (1 - ((q + 2 - g) / base) * b);
   const df = 4 + (q + 2) / (q * rho - 1);
-  const scaling = df / (mean * (df - 2));
+  const scaling = Math.abs(df - 2) < 1e-6 ? 1 : (df * inverseMean) / (df - 2);
   return test((scaling / q) * wald, q, df, scaling);
 }
 
