@@ -28,7 +28,7 @@ export function ProfileFound({ profile, samples, styles }: { profile: ProfileVie
         {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} />}
         <LineTable lines={profile.lines} samples={samples} styles={styles} alpha={profile.alpha} />
       </div>
-      <Statistics profile={profile} />
+      <Statistics profile={profile} samples={samples} />
     </div>
   );
 }

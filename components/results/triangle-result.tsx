@@ -4,13 +4,20 @@ import type { TriangleView } from '@/lib/results/types';
 
 const limit = (share: number) => (share <= 0 ? '0 %' : showPercent(share));
 
+/** d′ and its limits; without an upper end when everybody found the odd glass. */
+function sizeWords({ value, lower, upper }: NonNullable<TriangleView['dPrime']>): string {
+  const low = lower.toFixed(1);
+  if (value === null) return `above ${low}`;
+  return `${value.toFixed(1)} (${low} to ${upper === null ? 'no end' : upper.toFixed(1)})`;
+}
+
 function Numbers({ triangle }: { triangle: TriangleView }) {
-  const { n, correct, p, minimumCorrect: needed, pd } = triangle;
+  const { n, correct, p, minimumCorrect: needed, pd, dPrime: size } = triangle;
   return (
     <div>
       <p className="soft pb-2" id="test-is">Exact binomial test, one-sided, chance 1/3.</p>
       <table className="ledger folds" aria-describedby="test-is">
-        <thead><tr><th scope="col">Answers</th><th scope="col" className="num">Correct</th><th scope="col" className="num">Needed</th><th scope="col" className="num"><i>p</i></th><th scope="col" className="num">Distinguishers (95 % exact limits)</th></tr></thead>
+        <thead><tr><th scope="col">Answers</th><th scope="col" className="num">Correct</th><th scope="col" className="num">Needed</th><th scope="col" className="num"><i>p</i></th><th scope="col" className="num">Distinguishers (95 % exact limits)</th><th scope="col" className="num">d′ (95 % limits)</th></tr></thead>
         <tbody>
           <tr>
             <td data-label="Answers:">{n}</td>
@@ -18,9 +25,11 @@ function Numbers({ triangle }: { triangle: TriangleView }) {
             <td className="num" data-label="Needed:">{needed ?? 'none would do'}</td>
             <td className="num" data-label="p:">{p === null ? '–' : showP(p)}</td>
             <td className="num" data-label="Distinguishers:">{pd ? `${limit(pd.value)} (${limit(pd.lower)} to ${limit(pd.upper)})` : '–'}</td>
+            <td className="num" data-label="d′:">{size ? sizeWords(size) : '–'}</td>
           </tr>
         </tbody>
       </table>
+      <p className="hint pt-2">d′ is the distance between the two in units of one taster’s own scatter (Thurstone): below 1 small, above 2 large, common practice.</p>
     </div>
   );
 }
@@ -45,7 +54,7 @@ function Power({ triangle }: { triangle: TriangleView }) {
 export function TriangleResult({ triangle }: { triangle: TriangleView }) {
   if (triangle.whyNot) return <p>{triangle.whyNot}</p>;
   return (
-    <div className="stack" style={{ maxWidth: 640 }}>
+    <div className="stack" style={{ maxWidth: 760 }}>
       <CorrectPlot n={triangle.n} correct={triangle.correct} needed={triangle.minimumCorrect} />
       <Numbers triangle={triangle} />
       <Power triangle={triangle} />

@@ -1,9 +1,10 @@
 import { friedman, friedmanPermutation, intraclassCorrelations, StatsError, type BalancedScores } from '@/stats';
+import type { LimitedView } from './types';
 
 export interface AgreementNumbers {
   kendallW: number | null;
   kendallP: number | null;
-  icc: number | null;
+  icc: LimitedView | null;
 }
 
 /** Below this many panelists the test of W counts arrangements instead of leaning on F. */
@@ -12,7 +13,8 @@ const SMALL_PANEL = 8;
 /** Steps that the exact count may take while somebody waits for a page. */
 const BUDGET = 300_000;
 
-function orNull<T>(work: () => T): T | null {
+/** The work's result, or null where the statistic is not defined. */
+export function orNull<T>(work: () => T): T | null {
   try {
     return work();
   } catch (error) {
@@ -34,7 +36,7 @@ function meansByAssessor({ scores, assessors, products, replicates }: BalancedSc
 
 /**
  * Kendall's W with its test (Friedman: Iman and Davenport's F, or the permutation distribution for
- * fewer than eight panelists) and ICC(2,k), all on the panelists' means by sample. What has no
+ * fewer than eight panelists) and ICC(2,k) with its limits, all on the panelists' means by sample. What has no
  * value is null.
  */
 export function agreementOf(table: BalancedScores): AgreementNumbers {
@@ -43,5 +45,7 @@ export function agreementOf(table: BalancedScores): AgreementNumbers {
   const kendallP =
     ranked === null ? null : table.assessors < SMALL_PANEL ? orNull(() => friedmanPermutation(means, { budget: BUDGET }).p) : ranked.imanDavenport.p;
   const byProduct = Array.from({ length: table.products }, (_, j) => means.map((row) => row[j]!));
-  return { kendallW: ranked?.kendallW ?? null, kendallP, icc: orNull(() => intraclassCorrelations(byProduct).twoRandomMean.icc) };
+  const icc = orNull(() => intraclassCorrelations(byProduct).twoRandomMean);
+  const isWhole = icc !== null && [icc.icc, icc.lower, icc.upper].every(Number.isFinite);
+  return { kendallW: ranked?.kendallW ?? null, kendallP, icc: isWhole ? { value: icc.icc, low: icc.lower, high: icc.upper } : null };
 }

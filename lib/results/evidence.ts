@@ -66,6 +66,8 @@ export interface LongScore {
   assessor: number;
   product: number;
   replicate: number;
+  /** Place of the glass in its flight, from 1. */
+  position: number;
   score: number;
 }
 
@@ -86,7 +88,7 @@ export function longScores(scores: readonly OperationFact[], glasses: readonly G
     const glass = find(op);
     const assessor = numberOf.get(op.seatId);
     if (!glass || assessor === undefined || op.item === null || op.number === null) continue;
-    const row = { assessor, product: glass.sample, replicate: glass.block, score: op.number };
+    const row = { assessor, product: glass.sample, replicate: glass.block, position: glass.position, score: op.number };
     const line = lines.get(op.item);
     if (line) line.push(row);
     else lines.set(op.item, [row]);

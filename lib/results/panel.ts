@@ -34,7 +34,7 @@ function ownFigures(lines: readonly NamedLine[]): Map<number, Own[]> {
   for (const line of lines) {
     if (!line.numbers.table) continue;
     assessorPerformance(line.numbers.table).forEach((figures, index) => {
-      const seat = line.numbers.assessors[index]!;
+      const seat = line.numbers.complete[index]!;
       bySeat.set(seat, [...(bySeat.get(seat) ?? []), { line, figures }]);
     });
   }

@@ -1,19 +1,29 @@
-import { balancedScores, compactLetters, profileAnova, StatsError, tukeyComparisons, type BalancedScores, type ProfileAnova, type TestedLine } from '@/stats';
+import {
+  balancedScores,
+  compactLetters,
+  mixedAssessorModel,
+  profileAnova,
+  scaleUse,
+  servingEffect,
+  StatsError,
+  tukeyComparisons,
+  type BalancedScores,
+  type ProfileAnova,
+  type TestedLine,
+} from '@/stats';
+import { orNull } from './agreement';
 import { completeScores, type LongScore } from './evidence';
-import type { CellView, TestView } from './types';
+import { levelsOf, mixedLine } from './mixed-line';
+import type { CellView, LineView, PairView, PositionView, TestView } from './types';
 
 /** The numbers of one ballot line; the words of the ballot are added by the caller. */
-export interface LineNumbers {
-  cells: CellView[];
+export interface LineNumbers
+  extends Pick<LineView, 'cells' | 'gaps' | 'leftOut' | 'method' | 'product' | 'interaction' | 'assessor' | 'scaling' | 'position' | 'atEnds' | 'smallestDifference' | 'pairs' | 'whyNot'> {
   assessors: number[];
-  leftOut: number[];
-  product: TestView | null;
-  interaction: TestView | null;
-  assessor: TestView | null;
-  smallestDifference: number | null;
-  whyNot: string | null;
-  /** The complete table behind the tests, for the panel's own figures; null when there is none. */
+  /** The complete table of those who scored every glass, for the panel's own figures; null when there is none. */
   table: BalancedScores | null;
+  /** Panelists in `table`, in its order. */
+  complete: number[];
 }
 
 const testView = (line: TestedLine, df2: number): TestView | null =>
@@ -29,15 +39,7 @@ function plainCells(rows: readonly LongScore[], products: readonly number[]): Ce
   });
 }
 
-function tableOf(complete: readonly LongScore[], assessors: readonly number[], products: readonly number[]): BalancedScores {
-  return balancedScores({
-    assessor: complete.map((row) => assessors.indexOf(row.assessor)),
-    product: complete.map((row) => products.indexOf(row.product)),
-    score: complete.map((row) => row.score),
-  });
-}
-
-function compared(anova: ProfileAnova, products: readonly number[], alpha: number): { cells: CellView[]; smallestDifference: number } {
+function compared(anova: ProfileAnova, products: readonly number[], alpha: number): Pick<LineNumbers, 'cells' | 'smallestDifference' | 'pairs'> {
   const means = anova.productMeans;
   const n = anova.assessors * anova.replicates;
   const tukey = tukeyComparisons({ means, n, ms: anova.interaction.ms, df: anova.interaction.df, alpha });
@@ -45,41 +47,67 @@ function compared(anova: ProfileAnova, products: readonly number[], alpha: numbe
   const smallestDifference = tukey.criticalDifference!;
   const half = smallestDifference / 2;
   const cells = products.map((sample, j) => ({ sample, mean: means[j]!, n, low: means[j]! - half, high: means[j]! + half, letters: letters[j]! }));
-  return { cells, smallestDifference };
+  const pairs: PairView[] = tukey.pairs.map((pair) => ({ a: products[pair.first]!, b: products[pair.second]!, difference: pair.difference, low: pair.low, high: pair.high, p: pair.p }));
+  return { cells, smallestDifference, pairs };
+}
+
+/** What the place in the flight did, with samples and panelists allowed for; null where it can't be told. */
+function positionOf(rows: readonly LongScore[], assessors: readonly number[], products: readonly number[]): PositionView | null {
+  const places = [...new Set(rows.map((row) => row.position))].sort((a, b) => a - b);
+  const effect = orNull(() => servingEffect(levelsOf(rows, assessors, products), rows.map((row) => places.indexOf(row.position))));
+  return effect && { F: effect.f, df1: effect.df[0], df2: effect.df[1], p: effect.p, span: effect.span };
+}
+
+/** Panelists' use of the scale over their other disagreement; null where it is not defined. */
+function scalingOf(table: BalancedScores): TestView | null {
+  const model = orNull(() => mixedAssessorModel(table));
+  return model && testView(model.scaling, model.disagreement.df);
 }
 
 /**
- * Analysis of variance of one line with the panelists who scored every glass: panelists random,
- * product over the panelist × sample interaction, Tukey's differences at `alpha`.
+ * Analysis of one line at `alpha`. Every glass scored by every panelist: analysis of variance, panelists
+ * random, product over the panelist × sample interaction, Tukey's differences. With gaps: the same model
+ * by REML over everybody who scored a glass; where that can't be fitted, those who scored all of them.
  * What can't be computed says why in `whyNot`; nothing here is ever NaN.
  * @param products sample numbers, in the order of the cells
  */
 export function analyseLine(rows: readonly LongScore[], products: readonly number[], replicates: number, alpha: number): LineNumbers {
   const { complete, assessors, leftOut } = completeScores(rows, products.length, replicates);
+  const everybody = [...assessors, ...leftOut].sort((a, b) => a - b);
   const numbers: LineNumbers = {
-    cells: plainCells(rows, products), assessors, leftOut, product: null, interaction: null, assessor: null, smallestDifference: null, whyNot: null, table: null,
+    cells: plainCells(rows, products), assessors, complete: assessors, gaps: [], leftOut, method: 'none', product: null, interaction: null, assessor: null, scaling: null,
+    position: positionOf(rows, everybody, products), atEnds: 0, smallestDifference: null, pairs: [], whyNot: null, table: null,
   };
   if (rows.length === 0) return { ...numbers, whyNot: 'Nobody scored this line.' };
-  if (assessors.length < 2) {
+  numbers.atEnds = scaleUse(rows.map((row) => row.score), { low: 0, high: 100 }).atEnds;
+  if (assessors.length >= 2) numbers.table = balancedScores(levelsOf(complete, assessors, products));
+  if (leftOut.length > 0) {
+    const mixed = mixedLine(rows, everybody, products, alpha);
+    if (mixed) return { ...numbers, ...mixed, assessors: everybody, gaps: leftOut, leftOut: [], method: 'mixed' };
+  }
+  if (!numbers.table) {
     const who = assessors.length === 0 ? 'No panelist' : 'Only one panelist';
     return { ...numbers, whyNot: `${who} scored every glass on this line, and a test needs two. The means are of what was scored.` };
   }
+  return { ...numbers, ...balancedLine(numbers.table, complete, products, alpha) };
+}
+
+function balancedLine(table: BalancedScores, complete: readonly LongScore[], products: readonly number[], alpha: number): Partial<LineNumbers> {
   try {
-    const table = tableOf(complete, assessors, products);
-    numbers.table = table;
     const anova = profileAnova(table);
     const product = testView(anova.product, anova.interaction.df);
     if (!product) {
       const isFlat = anova.product.f === null;
-      return { ...numbers, cells: plainCells(complete, products), whyNot: isFlat ? 'Every panelist scored all glasses alike, so there is nothing to test.' : 'The panelists differ from each other in nothing, so there is no error to judge the samples by.' };
+      return { cells: plainCells(complete, products), whyNot: isFlat ? 'Every panelist scored all glasses alike, so there is nothing to test.' : 'The panelists differ from each other in nothing, so there is no error to judge the samples by.' };
     }
     return {
-      ...numbers, ...compared(anova, products, alpha), product,
+      ...compared(anova, products, alpha), product, method: 'anova',
       interaction: anova.error ? testView(anova.interaction, anova.error.df) : null,
       assessor: testView(anova.assessor, anova.interaction.df),
+      scaling: scalingOf(table),
     };
   } catch (error) {
-    if (error instanceof StatsError) return { ...numbers, whyNot: `${error.message}.` };
+    if (error instanceof StatsError) return { whyNot: `${error.message}.` };
     throw error;
   }
 }

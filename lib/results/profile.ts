@@ -29,9 +29,9 @@ export interface ProfileQuestion {
 const NAMED = 3;
 
 function lineView(line: LineFact, numbers: LineNumbers): LineView {
-  const { table, assessors, ...rest } = numbers;
+  const { table, complete: _complete, assessors, ...rest } = numbers;
   const agreement = table ? agreementOf(table) : { kendallW: null, kendallP: null, icc: null };
-  return { ...line, ...rest, ...agreement, assessors: assessors.length, method: numbers.product ? 'anova' : 'none' };
+  return { ...line, ...rest, ...agreement, assessors: assessors.length };
 }
 
 /**

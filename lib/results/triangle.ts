@@ -1,4 +1,4 @@
-import { binomialTest, CHANCE, distinguishers, minimumCorrect, power, proportionFromDistinguishers, smallestPanel } from '@/stats';
+import { binomialTest, CHANCE, distinguishers, dPrime, minimumCorrect, power, proportionFromDistinguishers, smallestPanel } from '@/stats';
 import type { SeatFact, TriangleAnswer } from './evidence';
 import type { TriangleView } from './types';
 
@@ -13,9 +13,11 @@ const GOAL = 0.8;
 const neededForHalf = (alpha: number): number =>
   smallestPanel(GOAL, { alpha, chance: CHANCE_OF_ONE, pc: proportionFromDistinguishers(0.5, CHANCE_OF_ONE) }).first;
 
+const finiteOrNull = (value: number): number | null => (Number.isFinite(value) ? value : null);
+
 /**
  * The triangle test of the answers given: exact one-sided binomial against one third, share of
- * distinguishers with exact limits, and the chance that so many answers would have shown a true
+ * distinguishers with exact limits, d′, and the chance that so many answers would have shown a true
  * difference. Sets that nobody answered count nowhere.
  */
 export function analyseTriangle(answers: readonly TriangleAnswer[], seats: readonly SeatFact[], alpha: number): TriangleView {
@@ -34,9 +36,10 @@ export function analyseTriangle(answers: readonly TriangleAnswer[], seats: reado
     sets: Math.max(1, ...answers.map((a) => a.set)), unanswered: answers.length - n, alpha, neededForHalf: neededForHalf(alpha), bySeat,
   };
   if (n === 0) {
-    return { ...frame, p: null, minimumCorrect: null, isShown: false, pd: null, power: [], whyNot: 'Nobody answered, so there is nothing to test.' };
+    return { ...frame, p: null, minimumCorrect: null, isShown: false, pd: null, dPrime: null, power: [], whyNot: 'Nobody answered, so there is nothing to test.' };
   }
   const least = minimumCorrect(n, alpha, CHANCE_OF_ONE);
+  const size = dPrime({ protocol: 'triangle', correct, n });
   const share = distinguishers({ correct, n, chance: CHANCE_OF_ONE });
   return {
     ...frame,
@@ -44,6 +47,7 @@ export function analyseTriangle(answers: readonly TriangleAnswer[], seats: reado
     minimumCorrect: least,
     isShown: least !== null && correct >= least,
     pd: { value: share.pd, lower: share.exact.pd.lower, upper: share.exact.pd.upper },
+    dPrime: { value: finiteOrNull(size.dPrime), lower: size.likelihood.lower, upper: finiteOrNull(size.likelihood.upper) },
     power: SHARES.map((pd) => ({ pd, power: power(n, { alpha, chance: CHANCE_OF_ONE, pc: proportionFromDistinguishers(pd, CHANCE_OF_ONE) }) })),
     whyNot: null,
   };

@@ -64,6 +64,30 @@ export interface CellView {
   letters: string;
 }
 
+/** Two samples on one line: `difference` = mean of `b` − mean of `a`, with Tukey's limits at 1 − alpha. */
+export interface PairView {
+  a: number;
+  b: number;
+  difference: number;
+  low: number;
+  high: number;
+  /** Adjusted for all pairs of the line. */
+  p: number;
+}
+
+/** A coefficient with its limits at 95 %. */
+export interface LimitedView {
+  value: number;
+  low: number;
+  high: number;
+}
+
+/** What the place of a glass in the flight did to scores of a line. */
+export interface PositionView extends TestView {
+  /** Between the place with the highest scores and that with the lowest, points of the scale. */
+  span: number;
+}
+
 /** What one line of the ballot showed. */
 export interface LineView {
   item: number;
@@ -73,23 +97,31 @@ export interface LineView {
   lowAnchor: string;
   highAnchor: string;
   cells: CellView[];
-  /** Panelists in the analysis: those who scored every glass on this line. */
+  /** Panelists in the analysis. */
   assessors: number;
-  /** Seats that scored some glasses of this line but not all: shown in no mean of a tested line. */
+  /** Seats in the analysis that scored some glasses of this line but not all. */
+  gaps: number[];
+  /** Seats with some scores that are in no mean of a tested line. */
   leftOut: number[];
-  /** `anova`: complete panelists. `none`: not computed, see `whyNot`. */
-  method: 'anova' | 'none';
+  /** `anova`: every panelist scored every glass. `mixed`: with gaps, by REML. `none`: not computed, see `whyNot`. */
+  method: 'anova' | 'mixed' | 'none';
   product: TestView | null;
-  /** The panelist × sample interaction over the error; null with one replicate. */
+  /** The panelist × sample interaction over the error; null with one replicate or with gaps. */
   interaction: TestView | null;
   assessor: TestView | null;
-  /** Tukey's honestly significant difference at the session's alpha. */
+  /** Different use of the scale, over what else panelists disagree in; null with gaps or two samples. */
+  scaling: TestView | null;
+  position: PositionView | null;
+  /** Share of the scores that lie at an end of the line. */
+  atEnds: number;
+  /** Tukey's honestly significant difference at the session's alpha; with gaps the largest of the pairs'. */
   smallestDifference: number | null;
+  pairs: PairView[];
   kendallW: number | null;
   /** p of Friedman's test, which is the test of W. */
   kendallP: number | null;
   /** Agreement of the panel's mean, ICC(2,k) on the panelists' means by sample. */
-  icc: number | null;
+  icc: LimitedView | null;
   whyNot: string | null;
 }
 
@@ -141,6 +173,8 @@ export interface TriangleView {
   isShown: boolean;
   /** Proportion of distinguishers, exact (Clopper–Pearson) two-sided limits at 95 %; not cut at 0. */
   pd: { value: number; lower: number; upper: number } | null;
+  /** Thurstone's d′ with likelihood limits at 95 %; null where all found the odd glass (no upper end). */
+  dPrime: { value: number | null; lower: number; upper: number | null } | null;
   /** True shares of distinguishers and the chance that this panel would have shown them. */
   power: { pd: number; power: number }[];
   /** Smallest panel that shows half the people tasting it, at 80 %. */

@@ -1,7 +1,7 @@
 import type { SessionRow } from '../sessions/find';
 import { count, listWords, sayP, showPercent } from './format';
 import { wereShownToDiffer } from './profile-line';
-import type { CountsView, ProfileView, SampleView, SeatView, TriangleView } from './types';
+import type { CountsView, LineView, ProfileView, SampleView, SeatView, TriangleView } from './types';
 
 /** Fewest trained panelists that a profile is usually scored by. */
 const PROFILE_PANEL = 8;
@@ -12,17 +12,47 @@ const MANY_LINES = 5;
 /** Below this the panel's mean is poorly reproducible (a rough rule of thumb for ICC). */
 const LOW_ICC = 0.5;
 
+/** More than this share of scores within 2 points of an end hides differences (common practice, no standard). */
+const MANY_AT_ENDS = 0.25;
+
 const seatWords = (numbers: readonly number[]) => `${numbers.length === 1 ? 'seat' : 'seats'} ${listWords(numbers)}`;
 
-function missingWarning(profile: ProfileView): string[] {
-  const lines = profile.lines.filter((line) => line.leftOut.length > 0);
-  if (lines.length === 0) return [];
-  const left = [...new Set(lines.flatMap((line) => line.leftOut))].sort((a, b) => a - b);
-  return [`Scores are missing (${seatWords(left)}; ${count(lines.length, 'line')}). Each line is tested with the panelists who scored every glass on it; the others’ scores on that line are kept, not counted in its means.`];
+const namesOf = (lines: readonly LineView[]) => listWords(lines.map((line) => line.name.toLowerCase()));
+
+const seatsOf = (lists: readonly (readonly number[])[]) => seatWords([...new Set(lists.flat())].sort((a, b) => a - b));
+
+function missingWarnings(profile: ProfileView): string[] {
+  const gaps = profile.lines.filter((line) => line.gaps.length > 0);
+  const left = profile.lines.filter((line) => line.leftOut.length > 0);
+  const warnings: string[] = [];
+  if (gaps.length > 0) {
+    warnings.push(`Scores are missing (${seatsOf(gaps.map((line) => line.gaps))}; ${count(gaps.length, 'line')}). The means there are what the samples would have scored had everybody tasted all of them, and each pair is judged by its own error.`);
+  }
+  if (left.length > 0) {
+    warnings.push(`Scores are missing (${seatsOf(left.map((line) => line.leftOut))}; ${count(left.length, 'line')}). There is too little to allow for it, so only panelists who scored every glass are tested; the others’ scores are kept, not counted in the means.`);
+  }
+  return warnings;
+}
+
+/** What leans on how the glasses were served and how the line was used. */
+function servingWarnings(profile: ProfileView): string[] {
+  const warnings: string[] = [];
+  const tested = profile.lines.filter((line) => line.position !== null);
+  // Over many lines one place or another always seems to matter: the risk is shared out among them.
+  const moved = tested.filter((line) => line.position!.p <= profile.alpha / tested.length);
+  if (moved.length > 0) {
+    const most = Math.max(...moved.map((line) => line.position!.span));
+    warnings.push(`The place of a glass in the flight moved scores of ${namesOf(moved)} (up to ${Math.round(most)} points). The serving orders even this out between samples; it makes the test less sharp.`);
+  }
+  const scaled = profile.lines.filter((line) => line.scaling && line.scaling.p <= profile.alpha);
+  if (scaled.length > 0) warnings.push(`Panelists spread their scores differently on ${namesOf(scaled)}: some use much more of the line than others. Means lean towards those who use more.`);
+  const ended = profile.lines.filter((line) => line.atEnds > MANY_AT_ENDS);
+  if (ended.length > 0) warnings.push(`Many scores of ${namesOf(ended)} lie at an end of the line. Differences beyond the end can’t be seen; other anchors would help next time.`);
+  return warnings;
 }
 
 function agreementWarnings(profile: ProfileView): string[] {
-  const low = profile.lines.filter((line) => line.product && ((line.icc !== null && line.icc < LOW_ICC) || (line.kendallP !== null && line.kendallP > profile.alpha)));
+  const low = profile.lines.filter((line) => line.product && ((line.icc !== null && line.icc.value < LOW_ICC) || (line.kendallP !== null && line.kendallP > profile.alpha)));
   const shownButLow = low.filter((line) => line.product!.p <= profile.alpha);
   const disagree = profile.lines.filter((line) => line.interaction && line.interaction.p <= profile.alpha);
   const warnings: string[] = [];
@@ -43,9 +73,9 @@ export function profileWarnings(profile: ProfileView): string[] {
   const fewest = Math.min(...tested.map((line) => line.assessors));
   const warnings: string[] = [];
   if (tested.length > 0 && fewest < PROFILE_PANEL) warnings.push(`${count(fewest, 'panelist')} only: profiles are usually scored by 8 to 12 trained panelists, and fewer show large differences only.`);
-  warnings.push(...missingWarning(profile));
+  warnings.push(...missingWarnings(profile));
   if (profile.replicates === 1) warnings.push('One replicate: the panelist × sample interaction can’t be told from error, and there is no repeatability. Samples are judged by the two together.');
-  warnings.push(...agreementWarnings(profile), ...splitWarning(profile));
+  warnings.push(...agreementWarnings(profile), ...servingWarnings(profile), ...splitWarning(profile));
   if (tested.length >= MANY_LINES) {
     warnings.push(`${tested.length} lines were tested, each at ${showPercent(profile.alpha)}: with no difference at all about ${(tested.length * profile.alpha).toFixed(1)} of them would still seem to show one. A single line that stands out is exploratory until it is tasted again.`);
   }

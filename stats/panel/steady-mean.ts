@@ -26,7 +26,7 @@ export function steadyMeanOf(count: number, value: (at: number) => number): numb
   return mean + (sum - product - productError(mean, count, product) + lost) / count;
 }
 
-/** {@link steadyMeanOf} a list. */
+/** The mean of a list, as {@link steadyMeanOf} takes it. */
 export function steadyMean(values: ArrayLike<number>): number {
   return steadyMeanOf(values.length, (at) => values[at]);
 }

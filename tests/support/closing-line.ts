@@ -7,10 +7,16 @@ declare module 'vitest' {
   }
 }
 
+interface Sum {
+  cases: number;
+  values: number;
+  wrong: number;
+}
+
 /** Prints, after everything else, how many reference cases and values a run compared. */
 export default class ClosingLine implements Reporter {
   onTestRunEnd(modules: readonly TestModule[]): void {
-    const sums = new Map<string, { cases: number; values: number; wrong: number }>();
+    const sums = new Map<string, Sum>();
     for (const testModule of modules) {
       for (const test of testModule.children.allTests()) {
         const { compared } = test.meta();
@@ -22,8 +28,11 @@ export default class ClosingLine implements Reporter {
         sums.set(compared.of, sum);
       }
     }
-    for (const [of, { cases, values, wrong }] of sums) {
-      process.stdout.write(`${of}: ${cases} cases compared, ${values} values, ${wrong} cases with differences\n`);
-    }
+    if (sums.size === 0) return;
+    const say = (of: string, { cases, values, wrong }: Sum) => process.stdout.write(`${of}: ${cases} cases compared, ${values} values, ${wrong} cases with differences\n`);
+    for (const [of, sum] of sums) say(of, sum);
+    const all = [...sums.values()];
+    const total = (part: keyof Sum) => all.reduce((sum, own) => sum + own[part], 0);
+    say('Together', { cases: total('cases'), values: total('values'), wrong: total('wrong') });
   }
 }

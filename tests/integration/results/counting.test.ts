@@ -63,14 +63,14 @@ describe('what counts', () => {
     expect(results.warnings.join(' ')).toContain('never counted');
   });
 
-  it('leaves a panelist with a gap out of the line, and says who', () => {
+  it('keeps a panelist with a gap in the line, by the mixed model, and says who', () => {
     const tasting = profile(4, 2);
     for (const seat of [1, 2, 3, 4]) scoreAll(tasting, seat, 2);
     tasting.say(3, { kind: 'clear', block: 2, position: tasting.positionOf(3, 2, 2), item: 1 });
     const results = finish(tasting);
     const line = results.profile!.lines[0]!;
-    expect(line).toMatchObject({ assessors: 3, leftOut: [3], method: 'anova' });
-    expect(line.cells.map((cell) => cell.n)).toEqual([6, 6, 6]);
+    expect(line).toMatchObject({ assessors: 4, gaps: [3], leftOut: [], method: 'mixed' });
+    expect(line.cells.map((cell) => cell.n)).toEqual([8, 7, 8]);
     expect(results.counts).toMatchObject({ cleared: 1, unanswered: 1 });
     expect(results.warnings.join(' ')).toContain('seat 3');
   });
