@@ -1,4 +1,8 @@
 import { NextResponse, type NextRequest } from 'next/server';
+import { PHONE_HEADER } from '@/lib/phone/settings';
+
+/** Pages in the device's language: sheets, joining, seats, pulling. */
+const PHONE_PAGES = /^\/(t|j|seat|offline)(\/|$)|^\/c\/[^/]+\/pull(\/|$)/;
 
 /** What every answer says to the browser, whatever the page. */
 const HEADERS: Record<string, string> = {
@@ -23,6 +27,8 @@ export function proxy(request: NextRequest): NextResponse {
     "img-src 'self' data: blob:",
     "font-src 'self'",
     "connect-src 'self'",
+    "worker-src 'self'",
+    "manifest-src 'self'",
     "object-src 'none'",
     "base-uri 'none'",
     "form-action 'self'",
@@ -31,6 +37,7 @@ export function proxy(request: NextRequest): NextResponse {
   const headers = new Headers(request.headers);
   headers.set('x-nonce', nonce);
   headers.set('content-security-policy', policy);
+  headers.set(PHONE_HEADER, PHONE_PAGES.test(request.nextUrl.pathname) ? '1' : '0');
   const response = NextResponse.next({ request: { headers } });
   response.headers.set('content-security-policy', policy);
   for (const [name, value] of Object.entries(HEADERS)) response.headers.set(name, value);
@@ -39,5 +46,5 @@ export function proxy(request: NextRequest): NextResponse {
 
 export const config = {
   // Built files and the icon carry no page, and answers of handlers set their own heads (lib/http).
-  matcher: [{ source: '/((?!_next/static|icon.svg|api/).*)' }],
+  matcher: [{ source: '/((?!_next/static|icon.svg|sw.js|icons/|manifest.webmanifest|api/).*)' }],
 };

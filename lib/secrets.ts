@@ -38,3 +38,6 @@ export const sealSecret = (): Buffer => secret('seal');
 
 /** The password of the sign-in and seat cookies. 64 characters. */
 export const cookieSecret = (): string => secret('cookie').toString('hex');
+
+/** The key from which each seat's own key for a handover by code is made. 32 bytes. */
+export const handoverSecret = (): Buffer => secret('handover');

@@ -1,14 +1,18 @@
 import type { Metadata } from 'next';
 import { JoinCodeForm } from '@/components/phone/join-forms';
-import { Door } from '@/components/ui/door';
+import { PhonePage } from '@/components/phone/phone-page';
+import { phoneWords } from '@/lib/i18n/server';
 
-export const metadata: Metadata = { title: 'Join a tasting' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('join')).t('join.title') };
+}
 
-export default function JoinPage() {
+export default async function JoinPage() {
+  const { t, list } = await phoneWords('join');
   return (
-    <Door title="Join a tasting">
-      <p className="soft">Scan the QR code on the board with your camera, or type its digits here.</p>
+    <PhonePage title={t('join.title')} list={list}>
+      <p className="soft">{t('join.scan')}</p>
       <JoinCodeForm />
-    </Door>
+    </PhonePage>
   );
 }

@@ -1,5 +1,6 @@
 'use client';
 
+import { useWords } from '@/components/i18n/words';
 import { Hash } from '@/components/ui/hash';
 import { Ring } from '@/components/ui/ring';
 import type { Sheet } from '@/lib/ballots/types';
@@ -12,29 +13,32 @@ interface Props {
   sheet: Sheet;
   store: SheetStore;
   state: SheetState;
+  place: Place;
   go(place: Place): void;
 }
 
 /** After handing in: whether everything was received, and the seal to check later. */
-export function DoneSheet({ sheet, store, state, go }: Props) {
-  const isAllIn = state.waiting === 0;
+export function DoneSheet({ sheet, store, state, place, go }: Props) {
+  const t = useWords();
+  const owed = state.waiting + state.sent;
+  const isAllIn = owed === 0;
   return (
     <>
-      <div className="bench"><h1>{isAllIn ? 'Thank you. Everything was received.' : 'Handed in. Some of it still waits here.'}</h1></div>
-      <Trouble state={state} store={store} joinKey={sheet.joinKey} />
+      <div className="bench"><h1>{isAllIn ? t('done.thanks') : t('done.waits')}</h1></div>
+      <Trouble state={state} store={store} joinKey={sheet.joinKey} place={place} go={go} />
       <div className="phone-body">
         <ul className="stack tight" role="status">
-          <li className="row"><Ring state={isAllIn ? 'done' : 'open'} /> {isAllIn ? `${state.received} answers with a receipt` : `${state.waiting} on this phone: keep this page open until they are sent`}</li>
-          {state.late > 0 && <li className="row warn"><Ring state="waits" /> {state.late} came after the close: kept and shown to the leader, not counted</li>}
+          <li className="row"><Ring state={isAllIn ? 'done' : 'open'} /> {isAllIn ? t('done.receipts', { n: state.received, receipt: state.lastReceipt }) : t('done.onPhone', { n: owed })}</li>
+          {state.late > 0 && <li className="row warn"><Ring state="waits" /> {t('done.late', { n: state.late })}</li>}
         </ul>
-        <p className="soft">Please say nothing of the glasses until the session is closed: others are still tasting.</p>
+        <p className="soft">{t('done.quiet')}</p>
         <div className="stack tight">
-          <h2>The seal</h2>
-          <p className="soft">This number was fixed before anybody tasted. When the key is open you can check that nothing was changed.</p>
+          <h2>{t('done.seal')}</h2>
+          <p className="soft">{t('done.sealWords')}</p>
           <p className="hash"><Hash hex={sheet.commitment} /></p>
-          <p><a href={`/check/${sheet.commitment}`}>Check it</a></p>
+          <p><a href={`/check/${sheet.commitment}`}>{t('done.check')}</a></p>
         </div>
-        {sheet.method === 'profile' && state.sessionState === 'open' && <button type="button" className="btn" onClick={() => go(firstPlace(sheet))}>Change an answer</button>}
+        {sheet.method === 'profile' && state.sessionState === 'open' && <button type="button" className="btn" onClick={() => go(firstPlace(sheet))}>{t('done.change')}</button>}
       </div>
     </>
   );

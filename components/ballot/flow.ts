@@ -31,8 +31,16 @@ export function nextBlock(sheet: Sheet, block: number): number | null {
   return sheet.blocks[index + 1]?.block ?? null;
 }
 
+/** The next glass or set, behind its rest if the session has one. */
+export const afterRest = (sheet: Sheet, next: Pick<Place, 'block' | 'position' | 'phase'>): Place => ({
+  ...next, view: sheet.restS > 0 ? 'rest' : 'glass', restUntil: Date.now() + sheet.restS * 1000,
+});
+
 export const codeAt = (sheet: Sheet, block: number, position: number): string =>
   sheet.blocks.find((candidate) => candidate.block === block)!.glasses[position - 1]!.code;
+
+/** The first eight digits of the seal, as the label shows them. */
+export const sealShort = ({ commitment }: Sheet): string => `${commitment.slice(0, 4)} ${commitment.slice(4, 8)}`;
 
 export interface Gap {
   block: number;

@@ -1,10 +1,12 @@
 'use client';
 
 import { useRef, useState, type KeyboardEvent, type PointerEvent } from 'react';
+import { useWords } from '@/components/i18n/words';
 import { Ring } from '@/components/ui/ring';
 import type { SheetItem } from '@/lib/ballots/types';
 import type { KeptState } from '@/lib/offline/answers';
-import { KEPT_WORDS } from './words';
+import { feel } from '@/lib/phone/feel';
+import { keptWord } from './words';
 
 /** A finger that moved less than this has tapped; one that moved sideways further is dragging. */
 const DRAG_PX = 6;
@@ -49,6 +51,7 @@ function keyStep(key: string, value: number | null): number | null {
  * A tap or a sideways drag sets it; a finger that scrolls the page changes nothing.
  */
 export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClear, onTouch }: Props) {
+  const t = useWords();
   const track = useRef<HTMLDivElement>(null);
   const start = useRef<{ x: number; isDragging: boolean } | null>(null);
   const [preview, setPreview] = useState<number | null>(null);
@@ -76,6 +79,7 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
     if (!start.current) return;
     start.current = null;
     setPreview(null);
+    feel();
     onSet(valueAt(event.clientX));
   };
   const onPointerCancel = () => {
@@ -100,18 +104,18 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
       <div className="head">
         <span className="name" id={nameId}>{line.name}</span>
         {shown === null ? (
-          <span className="state hint">{isClosed ? 'not answered' : 'touch the line'}</span>
+          <span className="state hint">{isClosed ? t('scale.notAnswered') : t('scale.touch')}</span>
         ) : (
           <span className="state">
             <Ring state={kept === 'received' || isClosed ? 'done' : 'open'} size={kept === 'received' ? 11 : 14} />
-            {preview !== null ? '' : isClosed ? 'closed' : kept && KEPT_WORDS[kept]}
+            {preview !== null ? '' : isClosed ? t('scale.closed') : kept && keptWord(t, kept)}
             <span className="val">{shown}</span>
           </span>
         )}
       </div>
       <div
         className="scale" ref={track} role="slider" tabIndex={isClosed ? -1 : 0} aria-labelledby={nameId} aria-disabled={isClosed || undefined}
-        aria-valuemin={0} aria-valuemax={100} aria-valuenow={shown ?? 0} aria-valuetext={shown === null ? 'not set' : `${shown}, from ${line.lowAnchor} to ${line.highAnchor}`}
+        aria-valuemin={0} aria-valuemax={100} aria-valuenow={shown ?? 0} aria-valuetext={shown === null ? t('scale.notSet') : t('scale.valueText', { value: shown, low: line.lowAnchor, high: line.highAnchor })}
         onPointerDown={onPointerDown} onPointerMove={onPointerMove} onPointerUp={onPointerUp} onPointerCancel={onPointerCancel} onKeyDown={onKeyDown} onFocus={onTouch}
       >
         <i className="end" />

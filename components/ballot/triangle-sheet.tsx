@@ -1,18 +1,19 @@
 'use client';
 
 import { useState, type KeyboardEvent } from 'react';
+import { useWords } from '@/components/i18n/words';
 import { Code } from '@/components/ui/code';
 import { Ring } from '@/components/ui/ring';
 import { choiceKey } from '@/lib/offline/answers';
 import { COMMENT_MAX } from '@/lib/ballots/schema';
-import { nextBlock } from './flow';
+import { feel } from '@/lib/phone/feel';
+import { afterRest, nextBlock, sealShort } from './flow';
 import { KeptLine, Trouble } from './kept-line';
 import type { SheetPart } from './sheet-part';
 
-const ORDINALS = ['1st', '2nd', '3rd'];
-
 /** One set of three: choose the one that differs, then lock. A locked set stays as it is (ISO 4120, 7.5). */
 export function TriangleSheet({ sheet, store, state, place, go }: SheetPart) {
+  const t = useWords();
   const { block } = place;
   const glasses = sheet.blocks.find((candidate) => candidate.block === block)!.glasses;
   const [chosen, setChosen] = useState<number | null>(null);
@@ -31,7 +32,7 @@ export function TriangleSheet({ sheet, store, state, place, go }: SheetPart) {
     setGuess(false);
     setComment('');
     if (next === null) go({ ...place, view: 'review' });
-    else go({ view: sheet.restS > 0 ? 'rest' : 'glass', block: next, position: 1, phase: null, restUntil: Date.now() + sheet.restS * 1000 });
+    else go(afterRest(sheet, { block: next, position: 1, phase: null }));
   };
   const onKeyDown = (event: KeyboardEvent<HTMLDivElement>) => {
     const step = event.key === 'ArrowDown' || event.key === 'ArrowRight' ? 1 : event.key === 'ArrowUp' || event.key === 'ArrowLeft' ? -1 : 0;
@@ -45,11 +46,11 @@ export function TriangleSheet({ sheet, store, state, place, go }: SheetPart) {
   return (
     <>
       <div className="bench">
-        <h1 id="ask">Two are the same.<br />Which one is different?</h1>
+        <h1 id="ask">{t('triangle.ask')}</h1>
         <div className="label" role="radiogroup" aria-labelledby="ask" onKeyDown={onKeyDown}>
           <div className="fields">
-            <span>Set {set} of {sheet.blocks.length}</span>
-            <span>Seal {sheet.commitment.slice(0, 4)} {sheet.commitment.slice(4, 8)}</span>
+            <span>{t('triangle.setOf', { n: set, total: sheet.blocks.length })}</span>
+            <span>{t('sheet.seal', { hash: sealShort(sheet) })}</span>
             <span><KeptLine state={state} /></span>
           </div>
           {glasses.map(({ position, code }) => {
@@ -57,34 +58,37 @@ export function TriangleSheet({ sheet, store, state, place, go }: SheetPart) {
             return (
               <button
                 key={position} type="button" role="radio" aria-checked={isOn} className={`tag ${isOn ? 'on' : ''}`} disabled={isClosed || locked !== undefined}
-                tabIndex={isOn || (chosen === null && position === 1) ? 0 : -1} onClick={() => setChosen(position)}
+                tabIndex={isOn || (chosen === null && position === 1) ? 0 : -1} onClick={() => {
+                  feel();
+                  setChosen(position);
+                }}
               >
-                <span className="ord">{ORDINALS[position - 1]}</span>
-                <Code code={code} size="l" />
-                <span className="is">{isOn ? <ChosenRing /> : <Ring state="to-come" size={28} />}{isOn && 'different'}</span>
+                <span className="ord">{t('triangle.ordinal', { n: position })}</span>
+                <Code code={code} size="l" label={t('common.codeWord')} />
+                <span className="is">{isOn ? <ChosenRing /> : <Ring state="to-come" size={28} />}{isOn && t('triangle.different')}</span>
               </button>
             );
           })}
         </div>
       </div>
-      <Trouble state={state} store={store} joinKey={sheet.joinKey} />
+      <Trouble state={state} store={store} joinKey={sheet.joinKey} place={place} go={go} />
       {!locked && !isClosed && (
         <>
-          <label className="tick"><input type="checkbox" checked={isGuess} onChange={(event) => setGuess(event.target.checked)} />It was a guess</label>
+          <label className="tick"><input type="checkbox" checked={isGuess} onChange={(event) => setGuess(event.target.checked)} />{t('triangle.guess')}</label>
           <details className="item">
-            <summary className="tick" style={{ padding: 0 }}>Say how it differs</summary>
-            <textarea className="input" aria-label="How does it differ?" rows={2} maxLength={COMMENT_MAX} value={comment} onChange={(event) => setComment(event.target.value)} />
+            <summary className="tick" style={{ padding: 0 }}>{t('triangle.how')}</summary>
+            <textarea className="input" aria-label={t('triangle.howLabel')} rows={2} maxLength={COMMENT_MAX} value={comment} onChange={(event) => setComment(event.target.value)} />
           </details>
-          <p className="rest"><span><b>Taste from the top. Spit each time.</b><br /><span className="soft">You may taste again before you lock.</span></span></p>
+          <p className="rest"><span><b>{t('triangle.order')}</b><br /><span className="soft">{t('triangle.again')}</span></span></p>
         </>
       )}
       <footer className="foot-bar">
         {locked ? (
-          <button type="button" className="btn btn-main wide" onClick={() => go({ ...place, view: 'review' })}>Go on</button>
+          <button type="button" className="btn btn-main wide" onClick={() => go({ ...place, view: 'review' })}>{t('triangle.goOn')}</button>
         ) : (
           <>
-            <p className="say">{chosen === null ? 'Choose the glass that differs; guess if you can’t tell.' : 'Once locked, this set stays as it is.'}</p>
-            <button type="button" className="btn btn-main wide" disabled={chosen === null || isClosed} onClick={() => void onLock()}>Lock set {set}</button>
+            <p className="say">{chosen === null ? t('triangle.choose') : t('triangle.stays')}</p>
+            <button type="button" className="btn btn-main wide" disabled={chosen === null || isClosed} onClick={() => void onLock()}>{t('triangle.lock', { n: set })}</button>
           </>
         )}
       </footer>

@@ -1,9 +1,11 @@
 'use client';
 
 import { useEffect, useRef } from 'react';
+import { useWords } from '@/components/i18n/words';
 
 /** What is wrong with the form, in one place that takes the focus; each line leads to its field. */
 export function ErrorSummary({ errors, formId }: { errors: Record<string, string[]>; formId: string }) {
+  const t = useWords();
   const box = useRef<HTMLDivElement>(null);
   const lines = Object.entries(errors).flatMap(([name, texts]) => texts.map((text) => ({ name, text })));
   const key = lines.map((line) => line.name + line.text).join('|');
@@ -17,7 +19,7 @@ export function ErrorSummary({ errors, formId }: { errors: Record<string, string
     <div className="summary" ref={box} tabIndex={-1} role="alert">
       <ul>
         {lines.map(({ name, text }) => (
-          <li key={name + text}>{name ? <a href={`#${formId}-${name}`}>{text}</a> : text}</li>
+          <li key={name + text}>{name ? <a href={`#${formId}-${name}`}>{t.said(text)}</a> : t.said(text)}</li>
         ))}
       </ul>
     </div>

@@ -2,6 +2,7 @@
 
 import { getInputProps, getSelectProps, getTextareaProps, type FieldMetadata } from '@conform-to/react';
 import type { ReactNode } from 'react';
+import { useWords } from '@/components/i18n/words';
 
 interface Common {
   field: FieldMetadata<unknown>;
@@ -13,13 +14,19 @@ interface Common {
 const describedBy = (field: FieldMetadata<unknown>, hint?: string) =>
   [hint && `${field.id}-hint`, field.errors && field.errorId].filter(Boolean).join(' ') || undefined;
 
+/** What is wrong with a field, in the page's language. */
+function FieldError({ field }: Pick<Common, 'field'>) {
+  const t = useWords();
+  return field.errors && <p className="error" id={field.errorId}>{field.errors.map(t.said).join(' ')}</p>;
+}
+
 function Frame({ field, label, hint, children }: Common & { children: ReactNode }) {
   return (
     <div className="field">
       <label htmlFor={field.id}>{label}</label>
       {hint && <p className="note" id={`${field.id}-hint`}>{hint}</p>}
       {children}
-      {field.errors && <p className="error" id={field.errorId}>{field.errors.join(' ')}</p>}
+      <FieldError field={field} />
     </div>
   );
 }
@@ -83,7 +90,7 @@ export function TickField({ field, label, hint }: Common) {
         <label htmlFor={field.id}>{label}</label>
       </div>
       {hint && <p className="note" id={`${field.id}-hint`}>{hint}</p>}
-      {field.errors && <p className="error" id={field.errorId}>{field.errors.join(' ')}</p>}
+      <FieldError field={field} />
     </div>
   );
 }
@@ -103,7 +110,7 @@ export function TicksField({ field, label, hint, options }: Common & { options: 
           </label>
         ))}
       </div>
-      {field.errors && <p className="error" id={field.errorId}>{field.errors.join(' ')}</p>}
+      <FieldError field={field} />
     </fieldset>
   );
 }

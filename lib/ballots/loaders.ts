@@ -1,7 +1,10 @@
 import 'server-only';
 import { getDb } from '@/db/client';
-import { ballotItems, seals, servings } from '@/db/schema';
-import { asc, eq } from 'drizzle-orm';
+import { ballotItems, descriptors, seals, servings } from '@/db/schema';
+import { and, asc, eq } from 'drizzle-orm';
+import { handoverKey } from '../handover/key';
+import type { Locale } from '../i18n/locales';
+import { translateLine } from '../lexicon/translate';
 import type { SeatAccess } from '../seats/access';
 import { seatLabel } from '../seats/format';
 import { standingAnswers } from './data';
@@ -19,11 +22,17 @@ function answersOf(seatId: string): SheetAnswers {
   return answers;
 }
 
-/** Everything that a seat is sent, and nothing else (see `Sheet`). */
-export function loadSheet({ seat, session }: SeatAccess): Sheet {
+/** Everything that a seat is sent, and nothing else (see `Sheet`), the ballot's words in the panelist's language. */
+export function loadSheet({ seat, session }: SeatAccess, locale: Locale): Sheet {
   const db = getDb();
   const glasses = db.select({ block: servings.block, position: servings.position, code: servings.code }).from(servings).where(eq(servings.seatId, seat.id)).orderBy(asc(servings.block), asc(servings.position)).all();
-  const items = db.select().from(ballotItems).where(eq(ballotItems.sessionId, session.id)).orderBy(asc(ballotItems.position)).all();
+  const items = db
+    .select({ position: ballotItems.position, phase: ballotItems.phase, kind: ballotItems.kind, name: ballotItems.name, definition: ballotItems.definition, lowAnchor: ballotItems.lowAnchor, highAnchor: ballotItems.highAnchor, key: descriptors.key })
+    .from(ballotItems)
+    .leftJoin(descriptors, and(eq(descriptors.id, ballotItems.descriptorId), eq(descriptors.cellarId, ballotItems.cellarId)))
+    .where(eq(ballotItems.sessionId, session.id))
+    .orderBy(asc(ballotItems.position))
+    .all();
   const blocks = [...new Set(glasses.map((glass) => glass.block))];
   return {
     protocol: 1,
@@ -35,11 +44,12 @@ export function loadSheet({ seat, session }: SeatAccess): Sheet {
     seatLabel: seatLabel(seat.number, seat.isReserve, session.seatsPlanned),
     seatRole: seat.seatRole ?? 'taste',
     commitment: db.select({ commitment: seals.commitment }).from(seals).where(eq(seals.sessionId, session.id)).get()!.commitment,
+    handoverKey: handoverKey(seat),
     restS: session.restS,
     servingVolumeMl: session.servingVolumeMl,
     allergens: session.allergens,
     blocks: blocks.map((block) => ({ block, glasses: glasses.filter((glass) => glass.block === block).map(({ position, code }) => ({ position, code })) })),
-    items: items.map(({ position, phase, kind, name, definition, lowAnchor, highAnchor }) => ({ item: position, phase, kind, name, definition, lowAnchor, highAnchor })),
+    items: items.map(({ position, phase, kind, key, ...words }) => ({ item: position, phase, kind, ...translateLine(words, key, locale) })),
     answers: answersOf(seat.id),
     isSubmitted: seat.submittedAt !== null,
   };

@@ -38,6 +38,8 @@ export interface Sheet {
   seatLabel: string;
   seatRole: SeatRole;
   commitment: string;
+  /** Marks a handover by code as this seat's own. */
+  handoverKey: string;
   restS: number;
   servingVolumeMl: number;
   allergens: Allergen[];

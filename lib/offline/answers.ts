@@ -2,8 +2,8 @@ import type { Operation } from '../ballots/schema';
 import type { SheetAnswers } from '../ballots/types';
 import type { OutboxRow } from './types';
 
-/** Three states, never merged; `saving` is the moment before the first. */
-export type KeptState = 'saving' | 'on-phone' | 'received' | 'late' | 'refused';
+/** Three states, never merged: on this phone, sent, received. `saving` is the moment before the first. */
+export type KeptState = 'saving' | 'on-phone' | 'sent' | 'received' | 'late' | 'refused';
 
 export interface Answer {
   op: Operation['body'] | null;

@@ -17,7 +17,8 @@ export function startPump(store: SheetStore): () => void {
   let timer: ReturnType<typeof setTimeout> | undefined;
   let failures = 0;
   let isStopped = false;
-  let seen = store.getState().waiting;
+  const owedNow = () => store.getState().waiting + store.getState().sent;
+  let seen = owedNow();
 
   const run = async () => {
     clearTimeout(timer);
@@ -32,9 +33,10 @@ export function startPump(store: SheetStore): () => void {
     void run();
   };
   const onChange = () => {
-    const { waiting, isUnkept } = store.getState();
-    if (waiting > seen && !isUnkept) void run();
-    if (!isUnkept) seen = waiting;
+    const { isUnkept } = store.getState();
+    const owed = owedNow();
+    if (owed > seen && !isUnkept) void run();
+    if (!isUnkept) seen = owed;
   };
   const onVisible = () => document.visibilityState === 'visible' && now();
 

@@ -10,16 +10,30 @@ import { randomUuid } from './uuid';
 /** Most operations in one delivery (the handler's own limit). */
 const BATCH = 200;
 
+/** How soon what could not be kept is tried again. */
+const RETRY_MS = 3_000;
+
+/** From this age on an unsent answer is worth a nag. */
+const OLD_MS = 24 * 60 * 60 * 1000;
+
 export interface SheetState {
   isReady: boolean;
   answers: ReadonlyMap<string, Answer>;
   place: Place | null;
-  /** Kept on this phone, no receipt yet. */
+  /** Kept on this phone, not on its way. */
   waiting: number;
-  /** Not even kept on this phone: say so, loudly. */
+  /** Handed to the network, no receipt yet; back to `waiting` when no answer comes. */
+  sent: number;
+  /** Not kept on this phone yet. */
   isUnkept: boolean;
+  /** Tried and could not be kept anywhere: say so, loudly. It is tried again. */
+  isLost: boolean;
+  /** Something has waited for more than a day. */
+  isOld: boolean;
   refused: readonly OutboxRow[];
   received: number;
+  /** The highest receipt number; 0 before the first. */
+  lastReceipt: number;
   late: number;
   sessionState: SessionState;
   /** Why the last delivery failed; null when it did not. */
@@ -44,6 +58,9 @@ export class SheetStore {
   private meta: SheetMeta;
   private listeners = new Set<() => void>();
   private unkept = new Set<string>();
+  private sent = new Set<string>();
+  private isLost = false;
+  private retry: ReturnType<typeof setTimeout> | undefined;
   private writing: Promise<void> = Promise.resolve();
   private delivering: Promise<boolean> | null = null;
   private sessionState: SessionState;
@@ -119,6 +136,9 @@ export class SheetStore {
         isKept = isMirrored;
       }
       if (isKept) for (const row of rows) this.unkept.delete(row.opId);
+      this.isLost = this.unkept.size > 0 && !isKept;
+      clearTimeout(this.retry);
+      if (this.isLost) this.retry = setTimeout(() => void this.write([...this.unkept].flatMap((opId) => this.rows.get(opId) ?? [])), RETRY_MS);
       this.changed();
     };
     // One after the other: a later state of a row must not be overtaken by an earlier one.
@@ -148,6 +168,8 @@ export class SheetStore {
       const waiting = this.waitingRows();
       const batch = waiting.slice(0, BATCH);
       const { place } = this.meta;
+      this.sent = new Set(batch.map((row) => row.opId));
+      this.changed();
       let answer: Awaited<ReturnType<Deliver>>;
       try {
         answer = await this.parts.deliver({
@@ -160,6 +182,7 @@ export class SheetStore {
       } catch {
         return this.fail('no-signal');
       }
+      this.sent.clear();
       if (answer.status === 401) return this.fail('no-seat');
       if (!answer.body || (answer.status !== 200 && answer.status !== 422)) return this.fail(answer.status >= 500 || answer.status === 429 ? 'no-signal' : 'not-understood');
       this.trouble = null;
@@ -170,6 +193,7 @@ export class SheetStore {
   }
 
   private fail(trouble: SheetState['trouble']): boolean {
+    this.sent.clear();
     this.trouble = trouble;
     this.changed();
     return false;
@@ -194,24 +218,35 @@ export class SheetStore {
   private derive(): SheetState {
     const rows = [...this.rows.values()];
     const answers = standing(this.parts.sheet.answers, rows);
-    if (this.unkept.size > 0) {
-      for (const answer of answers.values()) {
-        const row = rows.find((candidate) => candidate.op.body === answer.op);
-        if (row && this.unkept.has(row.opId)) answer.state = 'saving';
-      }
+    const under = new Map(rows.map((row) => [row.op.body, row.opId]));
+    for (const answer of answers.values()) {
+      const opId = answer.op && under.get(answer.op);
+      if (opId && this.unkept.has(opId)) answer.state = 'saving';
+      else if (opId && this.sent.has(opId)) answer.state = 'sent';
     }
+    const waiting = rows.filter((row) => row.state === 'waiting');
+    const oldest = Math.min(...waiting.map((row) => row.op.clientAt));
     return {
       isReady: this.isReady,
       answers,
       place: this.meta.place,
-      waiting: rows.filter((row) => row.state === 'waiting').length,
+      waiting: waiting.filter((row) => !this.sent.has(row.opId)).length,
+      sent: waiting.filter((row) => this.sent.has(row.opId)).length,
       isUnkept: this.unkept.size > 0,
+      isLost: this.isLost,
+      isOld: oldest < (this.parts.now ?? Date.now)() - OLD_MS,
       refused: rows.filter((row) => row.state === 'refused'),
       received: rows.filter((row) => row.state === 'received' && !row.isLate).length,
+      lastReceipt: Math.max(0, ...rows.map((row) => row.receiptNo ?? 0)),
       late: rows.filter((row) => row.isLate).length,
       sessionState: this.sessionState,
       trouble: this.trouble,
     };
+  }
+
+  /** What the server has no receipt for, in the phone's order: what a handover by code carries. */
+  owed(): Operation[] {
+    return this.waitingRows().map((row) => row.op);
   }
 
   private changed(): void {

@@ -15,7 +15,7 @@ export interface OutboxRow {
 
 /** Where the panelist is, so that a reload comes back to the same place. */
 export interface Place {
-  view: 'glass' | 'rest' | 'review' | 'done';
+  view: 'glass' | 'rest' | 'review' | 'done' | 'handover';
   block: number;
   position: number;
   phase: Phase | null;

@@ -3,7 +3,7 @@ import { getDb } from '@/db/client';
 import { SESSION_STATES } from '@/db/enums';
 import { earlyOpenings, operations, seals, users } from '@/db/schema';
 import { and, asc, count, eq } from 'drizzle-orm';
-import QRCode from 'qrcode';
+import encodeQR from 'qr';
 import { loadAccess, type Access } from '../auth/access';
 import { allows } from '../auth/permissions';
 import { isPourer, isTaster } from '../blind/read-key';
@@ -16,8 +16,8 @@ import { listMissing } from './readiness';
 import type { DesignChoices, OpeningView, SessionListItem, SessionView } from './types';
 
 /** A QR code as the address of a picture. */
-export async function qrPicture(text: string): Promise<string> {
-  const svg = await QRCode.toString(text, { type: 'svg', margin: 4, errorCorrectionLevel: 'M' });
+export function qrPicture(text: string): string {
+  const svg = encodeQR(text, 'svg', { border: 4, ecc: 'medium' });
   return `data:image/svg+xml;base64,${Buffer.from(svg).toString('base64')}`;
 }
 
@@ -108,7 +108,7 @@ export async function loadSession(slug: string, sessionId: string): Promise<{ ac
       pourers: design.pourers.map((pourer) => pourer.name),
       seatsPlanned: row.seatsPlanned, reservesPlanned: row.reservesPlanned, replicates: row.replicates, alpha: row.alpha,
       servingTemperatureC: row.servingTemperatureC, servingVolumeMl: row.servingVolumeMl, restS: row.restS, allergens: row.allergens,
-      joinCode: mayRun ? row.joinCode : null, joinUrl, joinQr: joinUrl ? await qrPicture(joinUrl) : null,
+      joinCode: mayRun ? row.joinCode : null, joinUrl, joinQr: joinUrl ? qrPicture(joinUrl) : null,
       commitment: db.select({ commitment: seals.commitment }).from(seals).where(eq(seals.sessionId, row.id)).get()?.commitment ?? null,
       sealedAt: show(row.sealedAt), openedAt: show(row.openedAt), closedAt: show(row.closedAt), unsealedAt: show(row.unsealedAt),
       abandonedAt: show(row.abandonedAt), abandonReason: row.abandonReason, closeReason: row.closeReason,

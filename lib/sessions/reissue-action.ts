@@ -22,7 +22,7 @@ export async function reissueAction(_previous: ReissueResult | null, data: FormD
     if (!input.success) return { url: null, qr: null, error: 'That seat is not there.' };
     const token = reissueSeat(await requireAccess(input.data.cellar, 'session.run'), input.data.sessionId, input.data.seat);
     const url = `${reach().url}/seat/${token}`;
-    return { url, qr: await qrPicture(url), error: null };
+    return { url, qr: qrPicture(url), error: null };
   } catch (error) {
     const known = asAppError(error);
     if (!known) throw error;

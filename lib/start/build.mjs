@@ -34,14 +34,33 @@ export function sourcesHash() {
 /** Whether `.next` holds a finished build of these very sources. */
 export const isBuilt = () => existsSync(path.join(ROOT, '.next/BUILD_ID')) && existsSync(STAMP) && readFileSync(STAMP, 'utf8') === sourcesHash();
 
+/**
+ * Bundles the service worker beside the build; `app/sw.js/route.ts` serves it. The page for no signal is
+ * named with the build's own id, so that a new build brings a new one.
+ */
+async function buildWorker() {
+  const { build } = await import('vite');
+  const revision = readFileSync(path.join(ROOT, '.next/BUILD_ID'), 'utf8').trim();
+  await build({
+    root: ROOT,
+    configFile: false,
+    publicDir: false,
+    logLevel: 'error',
+    define: { 'self.__OFFLINE_PAGE': JSON.stringify({ url: '/offline', revision }), 'process.env.NODE_ENV': '"production"' },
+    build: { outDir: path.join(ROOT, '.next'), emptyOutDir: false, lib: { entry: path.join(ROOT, 'lib/offline/worker.ts'), formats: ['iife'], name: 'worker', fileName: () => 'sw.js' } },
+  });
+}
+
 /** Builds for production. @returns {Promise<number>} exit code */
 export async function buildNow() {
   // Taken before: what changes while the build runs makes the next start build again.
   const hash = sourcesHash();
   rmSync(STAMP, { force: true });
   const code = await run(process.execPath, [NEXT_BIN, 'build'], { NODE_ENV: 'production' });
-  if (code === 0) writeFileSync(STAMP, hash);
-  return code;
+  if (code !== 0) return code;
+  await buildWorker();
+  writeFileSync(STAMP, hash);
+  return 0;
 }
 
 /** Builds when the sources have changed since the last build. */

@@ -1,19 +1,23 @@
 import type { Metadata } from 'next';
 import { TakeSeatForm } from '@/components/phone/join-forms';
-import { Door } from '@/components/ui/door';
+import { PhonePage } from '@/components/phone/phone-page';
+import { phoneWords } from '@/lib/i18n/server';
 import { findSeatLink } from '@/lib/seats/mutations';
 
-export const metadata: Metadata = { title: 'Move a seat to this phone' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('seat')).t('seat.title') };
+}
 
 export default async function TakeSeatPage({ params }: PageProps<'/seat/[token]'>) {
   const { token } = await params;
   const link = findSeatLink(token);
+  const { t, list } = await phoneWords('seat');
   return link ? (
-    <Door title={link.title}>
-      <p>Seat {link.number} moves to this phone. The former phone can’t answer for it any more; what was received stays.</p>
+    <PhonePage title={link.title} list={list}>
+      <p>{t('seat.moves', { n: link.number })}</p>
       <TakeSeatForm token={token} number={link.number} />
-    </Door>
+    </PhonePage>
   ) : (
-    <Door title="This link has run out"><p>It was used before, or it is older than four hours. Ask the leader for a new one.</p></Door>
+    <PhonePage title={t('seat.over')} list={list}><p>{t('seat.overWords')}</p></PhonePage>
   );
 }

@@ -2,13 +2,17 @@ import type { Metadata } from 'next';
 import { redirect } from 'next/navigation';
 import { SheetApp } from '@/components/ballot/sheet-app';
 import { loadSheet } from '@/lib/ballots/loaders';
+import { phoneWords } from '@/lib/i18n/server';
 import { findSeat } from '@/lib/seats/access';
 
-export const metadata: Metadata = { title: 'Tasting sheet' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('sheet')).t('sheet.title') };
+}
 
 export default async function SheetPage({ params }: PageProps<'/t/[joinKey]'>) {
   const { joinKey } = await params;
   const access = await findSeat(joinKey);
   if (!access) redirect(`/j/${encodeURIComponent(joinKey)}`);
-  return <SheetApp sheet={loadSheet(access)} />;
+  const { list } = await phoneWords('sheet', 'phases', 'kept', 'trouble', 'scale', 'triangle', 'rest', 'review', 'done', 'handover');
+  return <SheetApp sheet={loadSheet(access, list.locale)} list={list} />;
 }

@@ -67,9 +67,9 @@ describe('a delivery', () => {
     const seat = seatOf(scene.profileId, 1);
     deliver(seat, [op(score(80), 2)]);
     deliver(seat, [op(score(20), 1)]);
-    expect(loadSheet(seat).answers.scores).toEqual([{ block: 1, position: 1, item: 1, value: 80 }]);
+    expect(loadSheet(seat, 'en').answers.scores).toEqual([{ block: 1, position: 1, item: 1, value: 80 }]);
     deliver(seat, [op({ kind: 'clear', block: 1, position: 1, item: 1 }, 3)]);
-    expect(loadSheet(seat).answers.scores).toEqual([]);
+    expect(loadSheet(seat, 'en').answers.scores).toEqual([]);
     expect(rows()).toHaveLength(3);
   });
 
@@ -77,7 +77,7 @@ describe('a delivery', () => {
     const seat = seatOf(scene.triangleId, 1);
     deliver(seat, [op({ kind: 'choice', block: 1, position: 2, isGuess: true })]);
     expect(deliver(seat, [op({ kind: 'choice', block: 1, position: 3, isGuess: false })]).refused).toMatchObject([{ code: 'set_locked' }]);
-    expect(loadSheet(seat).answers.choices).toEqual([{ block: 1, position: 2, isGuess: true }]);
+    expect(loadSheet(seat, 'en').answers.choices).toEqual([{ block: 1, position: 2, isGuess: true }]);
   });
 
   it('after close is kept, said to be late, and never counted', () => {
@@ -86,7 +86,7 @@ describe('a delivery', () => {
     closeSession(scene.access('odo'), scene.profileId, null);
     const answer = deliver(seat, [op(score(99))]);
     expect(answer).toMatchObject({ state: 'closed', receipts: [{ admission: 'late' }], refused: [] });
-    expect(loadSheet(seat).answers.scores).toMatchObject([{ value: 40 }]);
+    expect(loadSheet(seat, 'en').answers.scores).toMatchObject([{ value: 40 }]);
     expect(rows().filter((row) => row.admission === 'late')).toHaveLength(1);
   });
 
@@ -103,7 +103,7 @@ describe('a delivery', () => {
     scene.db.update(seats).set({ tokenGeneration: 2 }).where(eq(seats.id, old.seat.id)).run();
     const fresh = { ...old, seat: { ...old.seat, tokenGeneration: 2 } };
     deliver(fresh, [op(score(70), 1)]);
-    expect(loadSheet(fresh).answers.scores).toMatchObject([{ value: 70 }]);
+    expect(loadSheet(fresh, 'en').answers.scores).toMatchObject([{ value: 70 }]);
   });
 
   it('of somebody who had left brings the seat back among those that owe', () => {

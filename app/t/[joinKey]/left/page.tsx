@@ -1,15 +1,21 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
-import { Door } from '@/components/ui/door';
+import { ForgetPages } from '@/components/phone/forget-pages';
+import { PhonePage } from '@/components/phone/phone-page';
+import { phoneWords } from '@/lib/i18n/server';
 
-export const metadata: Metadata = { title: 'You left the tasting' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('leave')).t('leave.leftTitle') };
+}
 
 export default async function LeftPage({ params }: PageProps<'/t/[joinKey]/left'>) {
   const { joinKey } = await params;
+  const { t, list } = await phoneWords('leave');
   return (
-    <Door title="You left the tasting">
-      <p>What you answered before is kept. Nobody is told a reason.</p>
-      <p>Changed your mind? <Link href={`/t/${joinKey}`}>Back to your sheet</Link></p>
-    </Door>
+    <PhonePage title={t('leave.leftTitle')} list={list}>
+      <p>{t('leave.left')}</p>
+      <p>{t('leave.changed')} <Link href={`/t/${joinKey}`}>{t('leave.back')}</Link></p>
+      <ForgetPages which="sheets" />
+    </PhonePage>
   );
 }

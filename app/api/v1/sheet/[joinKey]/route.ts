@@ -1,6 +1,7 @@
 import { loadSheet } from '@/lib/ballots/loaders';
 import { AppError } from '@/lib/errors';
 import { readHandler } from '@/lib/http/handler';
+import { requestLocale } from '@/lib/i18n/server';
 import { requireSeat } from '@/lib/seats/access';
 import { joinKeySchema } from '@/lib/seats/schema';
 
@@ -10,5 +11,5 @@ export const dynamic = 'force-dynamic';
 export const GET = readHandler(async (_request: Request, { params }: RouteContext<'/api/v1/sheet/[joinKey]'>) => {
   const joinKey = joinKeySchema.safeParse((await params).joinKey);
   if (!joinKey.success) throw new AppError('not_found');
-  return loadSheet(await requireSeat(joinKey.data));
+  return loadSheet(await requireSeat(joinKey.data), await requestLocale());
 });
