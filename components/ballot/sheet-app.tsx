@@ -67,7 +67,7 @@ function SheetScreen({ sheet }: { sheet: Sheet }) {
         {place.view === 'glass' && (isProfile ? <ProfileSheet {...parts} key={`${place.block}/${place.position}/${place.phase}`} /> : <TriangleSheet {...parts} key={place.block} />)}
         {place.view === 'review' && <ReviewSheet {...parts} />}
         {place.view === 'done' && <DoneSheet {...parts} />}
-        {place.view === 'handover' && <HandoverSheet sheet={sheet} store={store} state={state} onBack={() => go({ ...place, view: 'glass' })} />}
+        {place.view === 'handover' && <HandoverSheet sheet={sheet} store={store} state={state} onBack={() => go({ ...place, view: state.answers.has('submit') ? 'done' : 'glass' })} />}
         {(place.view === 'done' || place.view === 'review') && <OfflineNotes />}
       </main>
     </div>

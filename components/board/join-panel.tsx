@@ -2,7 +2,7 @@ import type { ReachMode } from '@/lib/reach';
 
 const REACH_WORDS: Record<ReachMode, string> = {
   https: 'Phones come by https: everything works, offline too.',
-  lan: 'Phones come over this network by plain http: tell people to keep the page open.',
+  lan: 'Phones come over this network by plain http: tell people to keep the page open. Closed, a sheet can’t be opened again without signal, and screens may dim.',
   localhost: 'Only this machine can reach the address. Set APP_URL, or connect it to a network, for phones.',
 };
 

@@ -1,6 +1,6 @@
 'use client';
 
-import { useEffect, useRef, useState } from 'react';
+import { useEffect, useRef, useState, useSyncExternalStore } from 'react';
 
 /** How often a frame is looked at; a phone stays cool and a code held still is seen at once. */
 const LOOK_MS = 160;
@@ -24,6 +24,9 @@ function read(decode: Decode, source: CanvasImageSource, width: number, height: 
   }
 }
 
+const never = () => () => {};
+const hasCamera = () => 'mediaDevices' in navigator;
+
 interface Props {
   /** Called for every code that is seen, again and again while it is held there. */
   onCode(text: string): void;
@@ -35,6 +38,7 @@ export function Scanner({ onCode, words }: Props) {
   const video = useRef<HTMLVideoElement>(null);
   const [isOn, setOn] = useState(false);
   const [hasFailed, setFailed] = useState(false);
+  const canScan = useSyncExternalStore(never, hasCamera, () => false) && !hasFailed;
   const seen = useRef(onCode);
   useEffect(() => {
     seen.current = onCode;
@@ -79,7 +83,7 @@ export function Scanner({ onCode, words }: Props) {
     if (text) seen.current(text);
     else setFailed(true);
   };
-  const canScan = typeof navigator !== 'undefined' && 'mediaDevices' in navigator && !hasFailed;
+
   return (
     <div className="stack tight">
       {isOn && <video ref={video} muted playsInline className="finder" />}

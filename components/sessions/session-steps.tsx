@@ -33,6 +33,7 @@ export function SessionSteps({ access, session }: Props) {
       {(session.state === 'open' || session.state === 'closed') && mayRun && (
         <LedgerRow question="Where is everyone?" note="Counts only: nobody sees a score before unsealing.">
           <Board url={`/api/v1/c/${which.cellar}/sessions/${session.id}/board`} method={session.method} initial={readBoard(access, session.id)} {...which} />
+          <p className="pt-3">A phone without signal? <Link href={`${base}/handover`}>Scan its codes</Link></p>
         </LedgerRow>
       )}
       {session.joinUrl && session.joinQr && session.joinCode && (

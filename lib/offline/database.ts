@@ -1,9 +1,10 @@
 import { openDB, type DBSchema, type IDBPDatabase } from 'idb';
-import type { OutboxRow, SheetMeta } from './types';
+import type { OutboxRow, PullRow, SheetMeta } from './types';
 
 interface TercetDb extends DBSchema {
   outbox: { key: string; value: OutboxRow; indexes: { sheet: string } };
   meta: { key: string; value: SheetMeta };
+  pulls: { key: string; value: PullRow };
 }
 
 export interface Kept {
@@ -16,6 +17,9 @@ export interface PhoneDatabase {
   load(sheetKey: string): Promise<Kept>;
   /** One strict transaction: when it resolves, the rows and the meta are on the disk. */
   keep(rows: OutboxRow[], meta: SheetMeta | null): Promise<void>;
+  /** Every pull that this phone holds, of all cellars and hands. */
+  loadPulls(): Promise<PullRow[]>;
+  keepPulls(rows: readonly PullRow[]): Promise<void>;
 }
 
 /**
@@ -25,10 +29,13 @@ export interface PhoneDatabase {
 export function openPhoneDatabase(name = 'tercet'): PhoneDatabase {
   let connection: Promise<IDBPDatabase<TercetDb>> | null = null;
   const open = () => {
-    connection ??= openDB<TercetDb>(name, 1, {
-      upgrade(db) {
-        db.createObjectStore('outbox', { keyPath: 'opId' }).createIndex('sheet', 'sheetKey');
-        db.createObjectStore('meta', { keyPath: 'sheetKey' });
+    connection ??= openDB<TercetDb>(name, 2, {
+      upgrade(db, from) {
+        if (from < 1) {
+          db.createObjectStore('outbox', { keyPath: 'opId' }).createIndex('sheet', 'sheetKey');
+          db.createObjectStore('meta', { keyPath: 'sheetKey' });
+        }
+        if (from < 2) db.createObjectStore('pulls', { keyPath: 'opId' });
       },
       terminated: () => {
         connection = null;
@@ -57,6 +64,12 @@ export function openPhoneDatabase(name = 'tercet'): PhoneDatabase {
         const writes: Promise<unknown>[] = rows.map((row) => tx.objectStore('outbox').put(row));
         if (meta) writes.push(tx.objectStore('meta').put(meta));
         await Promise.all([...writes, tx.done]);
+      }),
+    loadPulls: () => withReopen((db) => db.getAll('pulls')),
+    keepPulls: (rows) =>
+      withReopen(async (db) => {
+        const tx = db.transaction('pulls', 'readwrite', { durability: 'strict' });
+        await Promise.all([...rows.map((row) => tx.store.put(row)), tx.done]);
       }),
   };
 }

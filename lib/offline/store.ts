@@ -45,7 +45,7 @@ export type Deliver = (request: SyncRequest) => Promise<{ status: number; body: 
 
 export interface StoreParts {
   sheet: Sheet;
-  database: PhoneDatabase;
+  database: Pick<PhoneDatabase, 'load' | 'keep'>;
   mirror: Mirror;
   deliver: Deliver;
   now?: () => number;

@@ -1,5 +1,6 @@
 import type { Phase } from '@/db/enums';
 import type { Operation } from '../ballots/schema';
+import type { PhonePull } from '../pulls/schema';
 
 /** One operation on the phone, kept until the sheet is forgotten. The operation itself never changes. */
 export interface OutboxRow {
@@ -28,4 +29,18 @@ export interface SheetMeta {
   deviceId: string;
   nextSeq: number;
   place: Place | null;
+}
+
+/** One pull on a cellar hand's phone. The pull itself never changes. */
+export interface PullRow {
+  opId: string;
+  cellar: string;
+  /** Who drew it; it is sent only while the same person is signed in. */
+  userId: string;
+  /** The barrel's name and lot as they stood on the sheet, for the label. */
+  barrel: string;
+  lot: string;
+  pull: PhonePull;
+  state: 'waiting' | 'received' | 'refused';
+  message?: string;
 }

@@ -23,7 +23,7 @@ const pages = (cacheName: string) =>
   new NetworkFirst({ cacheName, networkTimeoutSeconds: PATIENCE_S, plugins: [onlyWhole(), new ExpirationPlugin({ maxEntries: 20, maxAgeSeconds: 30 * DAY_S })] });
 
 const isSheet = (path: string) => /^\/t\/[^/]+$/.test(path);
-const isPull = (path: string) => /^\/c\/[^/]+\/pull(\/|$)/.test(path);
+const isPull = (path: string) => /^\/pull\/[^/]+$/.test(path);
 const isBuiltFile = (path: string) => path.startsWith('/_next/static/') || path.startsWith('/icons/') || path === '/icon.svg';
 
 const serwist = new Serwist({

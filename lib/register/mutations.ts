@@ -101,34 +101,42 @@ export function emptyVessel(access: Access, input: z.output<typeof emptySchema>)
   }, { behavior: 'immediate' });
 }
 
+type NewPull = Omit<typeof pulls.$inferInsert, 'cellarId' | 'fillId' | 'pulledBy' | 'createdAt'> & { vesselId: string };
+
 /**
- * Records a pull from what the vessel held on that day.
+ * Records a pull from what the vessel held on that day, inside the caller's transaction.
+ * @throws AppError `not_found`, `conflict` (empty then)
+ */
+export function insertPull(tx: Tx, access: Access, { vesselId, ...pull }: NewPull): void {
+  const { id: cellarId, timeZone } = access.cellar;
+  const onDay = dayIn(pull.pulledAt, timeZone);
+  const vessel = vesselOf(tx, cellarId, vesselId);
+  if (!vessel) throw new AppError('not_found');
+  const fill = tx
+    .select()
+    .from(fills)
+    .where(and(eq(fills.vesselId, vessel.id), lt(fills.fromDay, `${onDay}~`), or(isNull(fills.toDay), gt(fills.toDay, onDay), eq(fills.toDay, onDay))))
+    .all()
+    .sort((a, b) => b.fromDay.localeCompare(a.fromDay))[0];
+  if (!fill) throw new AppError('conflict', `${vessel.name} held nothing on that day. Record its fill first.`, { pulledAt: 'The vessel was empty then' });
+  tx.insert(pulls).values({ ...pull, cellarId, fillId: fill.id, pulledBy: access.user.id, createdAt: now() }).run();
+  audit(tx, access, 'pull.recorded', 'pull', pull.id);
+}
+
+/**
+ * Records a pull from the desk's form.
  * @throws AppError `not_found`, `conflict` (empty then), `invalid` (in the future)
  */
-export function recordPull(access: Access, { cellar: _, vesselId, pulledAt: pulledText, isHissHeard, ...input }: PullInput): string {
+export function recordPull(access: Access, { cellar: _, pulledAt: pulledText, isHissHeard, ...input }: PullInput): string {
   requireCapability(access, 'pull.record');
-  const { id: cellarId, timeZone } = access.cellar;
-  const pulledAt = fromLocalInput(pulledText, timeZone);
+  const pulledAt = fromLocalInput(pulledText, access.cellar.timeZone);
   if (pulledAt.getTime() > now().getTime() + 5 * 60_000) throw new AppError('invalid', 'A pull can’t be in the future.', { pulledAt: 'Not in the future' });
-  const onDay = dayIn(pulledAt, timeZone);
-  return getDb().transaction((tx) => {
-    const vessel = vesselOf(tx, cellarId, vesselId);
-    if (!vessel) throw new AppError('not_found');
-    const fill = tx
-      .select()
-      .from(fills)
-      .where(and(eq(fills.vesselId, vessel.id), lt(fills.fromDay, `${onDay}~`), or(isNull(fills.toDay), gt(fills.toDay, onDay), eq(fills.toDay, onDay))))
-      .all()
-      .sort((a, b) => b.fromDay.localeCompare(a.fromDay))[0];
-    if (!fill) throw new AppError('conflict', `${vessel.name} held nothing on that day. Record its fill first.`, { pulledAt: 'The vessel was empty then' });
-    const id = newId();
-    tx.insert(pulls).values({
-      id, cellarId, fillId: fill.id, pulledAt, pulledBy: access.user.id, ...input, temperatureC: input.temperatureC ?? null,
-      isHissHeard: isHissHeard === undefined ? null : isHissHeard === 'yes', createdAt: now(),
-    }).run();
-    audit(tx, access, 'pull.recorded', 'pull', id);
-    return id;
-  }, { behavior: 'immediate' });
+  const id = newId();
+  getDb().transaction(
+    (tx) => insertPull(tx, access, { id, pulledAt, ...input, temperatureC: input.temperatureC ?? null, isHissHeard: isHissHeard === undefined ? null : isHissHeard === 'yes' }),
+    { behavior: 'immediate' },
+  );
+  return id;
 }
 
 const ARCHIVED = { lot: lots, vessel: vessels, pull: pulls } as const;

@@ -41,10 +41,40 @@ test('desk screens', async ({ browser }) => {
   const barrel = await hrefOf('31');
   const paths = [
     CELLAR, `${CELLAR}/barrels`, barrel, `${barrel}/edit`, `${barrel}/fill`, `${barrel}/pull`, `${CELLAR}/lots`, `${CELLAR}/lots/new`, `${CELLAR}/sessions`, open, draft, `${draft}/design`,
-    profile, `${profile}/results`, `${triangle}/results`, `${CELLAR}/calls`, `${CELLAR}/calls/new`, `${CELLAR}/lexicon/new`, `${CELLAR}/settings`, `${open}/pour`, '/account',
+    profile, `${profile}/results`, `${triangle}/results`, `${CELLAR}/calls`, `${CELLAR}/calls/new`, `${CELLAR}/lexicon/new`, `${CELLAR}/settings`, `${open}/pour`, `${open}/handover`, `${CELLAR}/barrels/tags`, '/account',
   ];
   const found: string[] = [];
   for (const path of paths) found.push(...(await inAllLights(owner, path)));
+  expect(found).toEqual([]);
+});
+
+test('the sheet and the pull sheet in three languages', async ({ browser }) => {
+  test.setTimeout(240_000);
+  const found: string[] = [];
+  const phone = await joinAsGuest(browser, readDemo(e2eFolder()).joinPath, 'Axe too');
+  const sheet = new URL(phone.url()).pathname;
+  const hand = await signedIn(browser, 'cellar hand');
+  for (const language of ['en', 'es', 'fr']) {
+    for (const width of [320, 390, 768]) {
+      for (const mode of MODES) {
+        for (const [page, path, ready] of [[phone, sheet, '[role=slider]'], [hand, '/pull/pellow-rake', 'input[type=search]']] as const) {
+          await page.setViewportSize({ width, height: 740 });
+          await page.context().addCookies([{ name: 'tercet-mode', value: mode, url: new URL(page.url()).origin }, { name: 'tercet-language', value: language, url: new URL(page.url()).origin }]);
+          await page.goto(path);
+          await expect(page.locator(ready).first()).toBeVisible();
+          await expect(page.locator('html')).toHaveAttribute('lang', language);
+          found.push(...(await check(page, `${path} at ${width} in ${mode}, ${language}`)));
+        }
+      }
+    }
+    // Text at 200 %: everything is still there and nothing is wider than the screen.
+    await phone.setViewportSize({ width: 320, height: 740 });
+    await phone.evaluate(() => (document.documentElement.style.fontSize = '200%'));
+    const overflow = await phone.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+    if (overflow > 0) found.push(`sheet with text at 200 % in ${language}: ${overflow} px too wide`);
+    await phone.locator('.view-menu summary').click();
+    found.push(...(await check(phone, `view menu at 200 % in ${language}`)));
+  }
   expect(found).toEqual([]);
 });
 

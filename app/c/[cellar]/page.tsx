@@ -28,7 +28,7 @@ export default async function TodayPage({ params }: PageProps<'/c/[cellar]'>) {
         )}
       </LedgerRow>
       {mayView && (
-        <LedgerRow question="Which barrel next?" note="A date of a call that came, or no pull for six weeks.">
+        <LedgerRow question="Which barrel next?" note={<>A date of a call that came, or no pull for six weeks. <Link href={`/pull/${cellar}`}>Pull sheet for the phone</Link></>}>
           {due.length === 0 ? <Empty action={<Link href={`${base}/barrels`}>All barrels</Link>}>Every barrel that holds wine was drawn from lately.</Empty> : <DueTable base={base} due={due} more={more} />}
         </LedgerRow>
       )}

@@ -105,7 +105,7 @@ describe('the sheet’s store', () => {
 
   it('says "on this phone" only after the database has it, and "received" only with a receipt', async () => {
     let finish = () => {};
-    const slow: PhoneDatabase = { load: async () => ({ rows: [], meta: null }), keep: () => new Promise((resolve) => { finish = resolve; }) };
+    const slow: Pick<PhoneDatabase, 'load' | 'keep'> = { load: async () => ({ rows: [], meta: null }), keep: () => new Promise((resolve) => { finish = resolve; }) };
     const server = new IdealServer();
     const store = new SheetStore({ sheet: sheet('1'), database: slow, mirror: noMirror(), deliver: async (request) => ({ status: 200, body: server.take(request) }) });
     await store.load();
@@ -125,7 +125,7 @@ describe('the sheet’s store', () => {
   });
 
   it('falls back to the mirror when the database is dead, and says so when even that fails', async () => {
-    const dead: PhoneDatabase = { load: () => Promise.reject(new Error('connection lost')), keep: () => Promise.reject(new Error('connection lost')) };
+    const dead: Pick<PhoneDatabase, 'load' | 'keep'> = { load: () => Promise.reject(new Error('connection lost')), keep: () => Promise.reject(new Error('connection lost')) };
     const mirror = memoryMirror();
     const deliver: Deliver = async () => { throw new Error('no signal'); };
     const store = new SheetStore({ sheet: sheet('1'), database: dead, mirror, deliver });

@@ -19,7 +19,13 @@ export default async function BarrelsPage({ params, searchParams }: PageProps<'/
   const hrefOf = (by: VesselSort) => `${base}?${new URLSearchParams({ ...(query && { q: query }), sort: by, ...(archived === 'yes' && { archived: 'yes' }) })}`;
   return (
     <LedgerPage>
-      <LedgerHead margin="Barrels" title="Every vessel and what it holds" actions={mayEdit && <Link className="btn btn-main" href={`${base}/new`}>Add a vessel</Link>} />
+      <LedgerHead margin="Barrels" title="Every vessel and what it holds" actions={(
+        <span className="row wrap">
+          {allows(access.roles, 'pull.record') && <Link className="btn" href={`/pull/${cellar}`}>Pull sheet</Link>}
+          <Link className="btn" href={`${base}/tags`}>Tags</Link>
+          {mayEdit && <Link className="btn btn-main" href={`${base}/new`}>Add a vessel</Link>}
+        </span>
+      )} />
       <LedgerRow question="Which barrel?" note={`${items.length} of ${total}. A head sorts by its column.`}>
         <form className="toolbar" role="search">
           <input className="input" type="search" name="q" defaultValue={query} placeholder="Number, lot, cooper, place" aria-label="Find a vessel" />

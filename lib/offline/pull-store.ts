@@ -1,0 +1,129 @@
+import type { PhonePull, PullsAnswer } from '../pulls/schema';
+import type { PhoneDatabase } from './database';
+import type { PullRow } from './types';
+
+export interface PullState {
+  isReady: boolean;
+  /** This hand's pulls in this cellar, newest first. */
+  rows: readonly PullRow[];
+  waiting: number;
+  /** Could not be kept on this phone. */
+  isLost: boolean;
+  trouble: 'no-signal' | 'signed-out' | null;
+}
+
+export interface PullParts {
+  cellar: string;
+  userId: string;
+  database: Pick<PhoneDatabase, 'loadPulls' | 'keepPulls'>;
+  /** @throws on no answer */
+  deliver(pulls: readonly PhonePull[]): Promise<{ status: number; body: PullsAnswer | null }>;
+}
+
+/** Most pulls in one delivery (the handler's own limit). */
+const BATCH = 100;
+
+/** The pull sheet's own store: each pull is kept on the phone before the screen says so, then sent. */
+export class PullStore {
+  private rows = new Map<string, PullRow>();
+  private listeners = new Set<() => void>();
+  private delivering: Promise<boolean> | null = null;
+  private isReady = false;
+  private isLost = false;
+  private trouble: PullState['trouble'] = null;
+  private snapshot: PullState;
+
+  constructor(private readonly parts: PullParts) {
+    this.snapshot = this.derive();
+  }
+
+  subscribe = (listener: () => void): (() => void) => {
+    this.listeners.add(listener);
+    return () => this.listeners.delete(listener);
+  };
+
+  getState = (): PullState => this.snapshot;
+
+  /** Reads what this phone kept for this hand and cellar. */
+  async load(): Promise<void> {
+    try {
+      for (const row of await this.parts.database.loadPulls()) {
+        if (row.cellar === this.parts.cellar && row.userId === this.parts.userId) this.rows.set(row.opId, row);
+      }
+    } catch {
+      this.isLost = true;
+    }
+    this.isReady = true;
+    this.changed();
+  }
+
+  /** Keeps a pull. @returns whether it is on this phone */
+  async record(pull: PhonePull, barrel: string, lot: string): Promise<boolean> {
+    const row: PullRow = { opId: pull.opId, cellar: this.parts.cellar, userId: this.parts.userId, barrel, lot, pull: Object.freeze({ ...pull }), state: 'waiting' };
+    this.rows.set(row.opId, row);
+    return this.write([row]);
+  }
+
+  private async write(rows: PullRow[]): Promise<boolean> {
+    try {
+      await this.parts.database.keepPulls(rows);
+      this.isLost = false;
+    } catch {
+      this.isLost = true;
+    }
+    this.changed();
+    return !this.isLost;
+  }
+
+  /** Sends what waits. @returns whether nothing waits any more */
+  flush(): Promise<boolean> {
+    this.delivering ??= this.deliverAll().finally(() => {
+      this.delivering = null;
+    });
+    return this.delivering;
+  }
+
+  private async deliverAll(): Promise<boolean> {
+    for (;;) {
+      const waiting = [...this.rows.values()].filter((row) => row.state === 'waiting').slice(0, BATCH);
+      if (waiting.length === 0) {
+        this.trouble = null;
+        this.changed();
+        return true;
+      }
+      let answer: Awaited<ReturnType<PullParts['deliver']>>;
+      try {
+        answer = await this.parts.deliver(waiting.map((row) => row.pull));
+      } catch {
+        return this.fail('no-signal');
+      }
+      if (answer.status === 401 || answer.status === 403 || answer.status === 404) return this.fail('signed-out');
+      if (answer.status !== 200 || !answer.body) return this.fail('no-signal');
+      const { received, refused } = answer.body;
+      const settled = waiting.flatMap((row): PullRow[] => {
+        const refusal = refused.find((entry) => entry.opId === row.opId);
+        if (refusal) return [{ ...row, state: 'refused', message: refusal.message }];
+        return received.includes(row.opId) ? [{ ...row, state: 'received' }] : [];
+      });
+      if (settled.length === 0) return this.fail('no-signal');
+      for (const row of settled) this.rows.set(row.opId, row);
+      await this.write(settled);
+    }
+  }
+
+  private fail(trouble: PullState['trouble']): boolean {
+    this.trouble = trouble;
+    this.changed();
+    return false;
+  }
+
+  private derive(): PullState {
+    const rows = [...this.rows.values()].sort((a, b) => b.pull.pulledAt - a.pull.pulledAt);
+    return { isReady: this.isReady, rows, waiting: rows.filter((row) => row.state === 'waiting').length, isLost: this.isLost, trouble: this.trouble };
+  }
+
+  private changed(): void {
+    this.snapshot = this.derive();
+    for (const listener of this.listeners) listener();
+  }
+}
