@@ -2,7 +2,7 @@
 
 import { useState } from 'react';
 import { useWords } from '@/components/i18n/words';
-import { COMMENT_MAX } from '@/lib/ballots/schema';
+import { COMMENT_MAX } from '@/lib/ballots/limits';
 import type { KeptState } from '@/lib/offline/answers';
 import { keptWord } from './words';
 

@@ -4,10 +4,10 @@ import { Rich, useWords } from '@/components/i18n/words';
 import type { SheetState, SheetStore } from '@/lib/offline/store';
 import type { Place } from '@/lib/offline/types';
 
-/** How much is on this phone only, and what is on its way. Always visible. */
-export function KeptLine({ state }: { state: SheetState }) {
+/** How much is on this phone only, and what is on its way. Always visible. `isDrafting`: a finger has just moved. */
+export function KeptLine({ state, isDrafting = false }: { state: SheetState; isDrafting?: boolean }) {
   const t = useWords();
-  if (state.isUnkept) return <>{t('kept.saving')}</>;
+  if (state.isUnkept || isDrafting) return <>{t('kept.saving')}</>;
   if (state.waiting > 0) return <>{t('kept.waiting', { n: state.waiting })}</>;
   if (state.sent > 0) return <>{t('kept.sending', { n: state.sent })}</>;
   return <>{state.received > 0 ? t('kept.allReceived') : t('kept.nothing')}</>;

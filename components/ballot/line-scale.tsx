@@ -1,10 +1,11 @@
 'use client';
 
-import { useRef, useState, type KeyboardEvent, type PointerEvent } from 'react';
+import { memo, useRef, useState, type FocusEvent, type KeyboardEvent, type PointerEvent, type TouchEvent } from 'react';
 import { useWords } from '@/components/i18n/words';
 import { Ring } from '@/components/ui/ring';
 import type { SheetItem } from '@/lib/ballots/types';
 import type { KeptState } from '@/lib/offline/answers';
+import { afterPaint } from '@/lib/phone/after-paint';
 import { feel } from '@/lib/phone/feel';
 import { keptWord } from './words';
 
@@ -17,9 +18,10 @@ interface Props {
   kept: KeptState | null;
   isActive: boolean;
   isClosed: boolean;
-  onSet(value: number): void;
-  onClear(): void;
-  onTouch(): void;
+  /** The same functions at every render: a ballot of forty lines paints the one that changed. */
+  onSet(item: number, value: number): void;
+  onClear(item: number): void;
+  onTouch(item: number): void;
 }
 
 /** What a key does to the value; the first arrow sets the middle. Null for keys that do nothing here. */
@@ -50,11 +52,14 @@ function keyStep(key: string, value: number | null): number | null {
  * An unstructured line from 0 to 100 with words at its ends. Untouched it has no ring and no value.
  * A tap or a sideways drag sets it; a finger that scrolls the page changes nothing.
  */
-export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClear, onTouch }: Props) {
+export const LineScale = memo(function LineScale({ line, value, kept, isActive, isClosed, onSet, onClear, onTouch }: Props) {
   const t = useWords();
   const track = useRef<HTMLDivElement>(null);
   const start = useRef<{ x: number; isDragging: boolean } | null>(null);
   const [preview, setPreview] = useState<number | null>(null);
+  const [isTouching, setTouching] = useState(false);
+  // The finger's own value until the sheet has taken it: the line answers before anything else is drawn.
+  if (preview !== null && !isTouching && preview === value) setPreview(null);
   const shown = preview ?? value;
   const nameId = `line-${line.item}-${line.phase}`;
 
@@ -65,12 +70,12 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
   const onPointerDown = (event: PointerEvent) => {
     if (isClosed || event.button > 0) return;
     start.current = { x: event.clientX, isDragging: false };
-    onTouch();
   };
   const onPointerMove = (event: PointerEvent<HTMLDivElement>) => {
     if (!start.current) return;
     if (!start.current.isDragging && Math.abs(event.clientX - start.current.x) > DRAG_PX) {
       start.current.isDragging = true;
+      setTouching(true);
       event.currentTarget.setPointerCapture(event.pointerId);
     }
     if (start.current.isDragging) setPreview(valueAt(event.clientX));
@@ -78,25 +83,36 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
   const onPointerUp = (event: PointerEvent) => {
     if (!start.current) return;
     start.current = null;
-    setPreview(null);
-    feel();
-    onSet(valueAt(event.clientX));
+    const next = valueAt(event.clientX);
+    setTouching(false);
+    setPreview(next === value ? null : next);
+    afterPaint(() => {
+      feel();
+      onSet(line.item, next);
+    });
   };
   const onPointerCancel = () => {
     start.current = null;
+    setTouching(false);
     setPreview(null);
+  };
+  // No mouse events after a touch: on a slow phone they would hold up the paint.
+  const onTouchEnd = (event: TouchEvent) => event.cancelable && event.preventDefault();
+  const onFocus = (event: FocusEvent) => {
+    // A finger's focus changes nothing before the finger has set something.
+    if (event.currentTarget.matches(':focus-visible')) onTouch(line.item);
   };
   const onKeyDown = (event: KeyboardEvent) => {
     if (isClosed) return;
     if (event.key === 'Delete' || event.key === 'Backspace') {
       event.preventDefault();
-      return onClear();
+      return onClear(line.item);
     }
     const next = keyStep(event.key, value);
     if (next === null) return;
     event.preventDefault();
-    onTouch();
-    onSet(next);
+    onTouch(line.item);
+    onSet(line.item, next);
   };
 
   return (
@@ -108,7 +124,7 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
         ) : (
           <span className="state">
             <Ring state={kept === 'received' || isClosed ? 'done' : 'open'} size={kept === 'received' ? 11 : 14} />
-            {preview !== null ? '' : isClosed ? t('scale.closed') : kept && keptWord(t, kept)}
+            {isTouching ? '' : preview !== null ? keptWord(t, 'saving') : isClosed ? t('scale.closed') : kept && keptWord(t, kept)}
             <span className="val">{shown}</span>
           </span>
         )}
@@ -116,7 +132,7 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
       <div
         className="scale" ref={track} role="slider" tabIndex={isClosed ? -1 : 0} aria-labelledby={nameId} aria-disabled={isClosed || undefined}
         aria-valuemin={0} aria-valuemax={100} aria-valuenow={shown ?? 0} aria-valuetext={shown === null ? t('scale.notSet') : t('scale.valueText', { value: shown, low: line.lowAnchor, high: line.highAnchor })}
-        onPointerDown={onPointerDown} onPointerMove={onPointerMove} onPointerUp={onPointerUp} onPointerCancel={onPointerCancel} onKeyDown={onKeyDown} onFocus={onTouch}
+        onPointerDown={onPointerDown} onPointerMove={onPointerMove} onPointerUp={onPointerUp} onPointerCancel={onPointerCancel} onTouchEnd={onTouchEnd} onKeyDown={onKeyDown} onFocus={onFocus}
       >
         <i className="end" />
         <i className="end r" />
@@ -127,7 +143,7 @@ export function LineScale({ line, value, kept, isActive, isClosed, onSet, onClea
       <div className="words"><span>{line.lowAnchor}</span><span>{line.highAnchor}</span></div>
     </section>
   );
-}
+});
 
 function Grip({ isReceived, isActive }: { isReceived: boolean; isActive: boolean }) {
   const stroke = isReceived && !isActive ? 'var(--ink)' : 'var(--mal)';

@@ -1,6 +1,6 @@
 'use client';
 
-import { useRef, useState } from 'react';
+import { useCallback, useEffect, useRef, useState } from 'react';
 import { useWords } from '@/components/i18n/words';
 import type { SheetItem } from '@/lib/ballots/types';
 import { commentKey, faultKey, scoreKey } from '@/lib/offline/answers';
@@ -45,6 +45,8 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
   };
   const set = (item: number, value: number) => {
     clearTimeout(burst.current);
+    if (draft && draft.item !== item) keep(draft.item, draft.value);
+    setTouched(item);
     if (draft?.item !== item) setBefore({ item, value: keptValue(item) });
     setDraft({ item, value });
     burst.current = setTimeout(() => keep(item, value), BURST_MS);
@@ -66,6 +68,18 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
     if (last.value === null) void store.record({ kind: 'clear', block, position, item: last.item });
     else keep(last.item, last.value);
   };
+
+  const touch = (item: number) => {
+    if (draft && draft.item !== item) settle();
+    setTouched(item);
+  };
+  const acts = useRef({ set, clear, touch });
+  useEffect(() => {
+    acts.current = { set, clear, touch };
+  });
+  const onSet = useCallback((item: number, value: number) => acts.current.set(item, value), []);
+  const onClear = useCallback((item: number) => acts.current.clear(item), []);
+  const onTouch = useCallback((item: number) => acts.current.touch(item), []);
 
   const untouched = lines.filter((line) => valueOf(line) === null).length;
   const glasses = sheet.blocks.find((candidate) => candidate.block === block)!.glasses;
@@ -91,7 +105,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
     <>
       <GlassLabel
         fields={[sheet.blocks.length > 1 ? t('sheet.flightOf', { n: block, total: sheet.blocks.length }) : t('sheet.flight'), t('sheet.glassOf', { n: position, total: glasses.length }), t('sheet.seal', { hash: sealShort(sheet) })]}
-        code={codeAt(sheet, block, position)} done={position - 1} total={glasses.length} foot={<KeptLine state={state} />}
+        code={codeAt(sheet, block, position)} done={position - 1} total={glasses.length} foot={<KeptLine state={state} isDrafting={draft !== null} />}
       />
       <div className="phase">
         <h1>{phaseWord(t, phase)}</h1>
@@ -102,11 +116,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
         <LineScale
           key={`${block}/${position}/${line.item}`} line={line} value={valueOf(line)} isActive={touched === line.item} isClosed={isClosed}
           kept={draft?.item === line.item ? 'saving' : (state.answers.get(scoreKey(block, position, line.item))?.state ?? null)}
-          onSet={(value) => set(line.item, value)} onClear={() => clear(line.item)}
-          onTouch={() => {
-            if (draft && draft.item !== line.item) settle();
-            setTouched(line.item);
-          }}
+          onSet={onSet} onClear={onClear} onTouch={onTouch}
         />
       ))}
       {flags.length > 0 && (

@@ -5,7 +5,7 @@ import { useWords } from '@/components/i18n/words';
 import { Code } from '@/components/ui/code';
 import { Ring } from '@/components/ui/ring';
 import { choiceKey } from '@/lib/offline/answers';
-import { COMMENT_MAX } from '@/lib/ballots/schema';
+import { COMMENT_MAX } from '@/lib/ballots/limits';
 import { feel } from '@/lib/phone/feel';
 import { afterRest, nextBlock, sealShort } from './flow';
 import { KeptLine, Trouble } from './kept-line';

@@ -3,7 +3,7 @@
 import { useId, useState, type FormEvent, type ReactNode } from 'react';
 import { useWords } from '@/components/i18n/words';
 import { DRAW_METHODS, type DrawMethod } from '@/db/enums';
-import { TEMPERATURE_C, VOLUME_ML } from '@/lib/pulls/schema';
+import { TEMPERATURE_C, VOLUME_ML } from '@/lib/pulls/limits';
 import type { PullFacts } from './pull-steps';
 
 type Noted = Pick<PullFacts, 'drawMethod' | 'volumeMl' | 'temperatureC' | 'colour' | 'note'>;

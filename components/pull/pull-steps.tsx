@@ -5,7 +5,8 @@ import { useSecondsLeft } from '@/components/ballot/rest-screen';
 import { useWords } from '@/components/i18n/words';
 import type { MessageKey } from '@/lib/i18n/words';
 import type { PullBarrel } from '@/lib/pulls/loaders';
-import { EVAPORATION_S, type PhonePull } from '@/lib/pulls/schema';
+import { EVAPORATION_S } from '@/lib/pulls/limits';
+import type { PhonePull } from '@/lib/pulls/schema';
 import { PullNote } from './pull-note';
 
 export type PullFacts = Omit<PhonePull, 'opId' | 'vesselId' | 'pulledAt'>;

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { PHASES } from '@/db/enums';
+import { COMMENT_MAX } from './limits';
 
 /** Version 4 (random) ids made on the phone. */
 const clientId = z.uuid({ version: 'v4' });
@@ -7,8 +8,6 @@ const clientId = z.uuid({ version: 'v4' });
 /** Blocks (replicates, sets) and positions count from 1; a glass is named by the two, never by a row id. */
 const place = { block: z.int().min(1).max(12), position: z.int().min(1).max(40) };
 const item = z.int().min(1).max(80);
-
-export const COMMENT_MAX = 1000;
 
 /** What one operation says. `choice` is final; of the others the latest counts, and earlier ones are kept. */
 export const operationBodySchema = z.discriminatedUnion('kind', [

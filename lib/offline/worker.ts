@@ -54,8 +54,8 @@ async function keep(page: string, files: readonly string[]): Promise<void> {
   const { pathname } = new URL(page, self.location.origin);
   const name = isSheet(pathname) ? SHEETS : isPull(pathname) ? CELLAR : null;
   if (!name) return;
-  const answer = await fetch(page, { credentials: 'same-origin', redirect: 'manual', headers: { accept: 'text/html' } });
-  if (answer.status === 200) await (await caches.open(name)).put(page, answer);
+  const answer = await fetch(page, { credentials: 'same-origin', redirect: 'manual', headers: { accept: 'text/html' } }).catch(() => null);
+  if (answer?.status === 200) await (await caches.open(name)).put(page, answer);
 }
 
 self.addEventListener('message', (event) => {

@@ -14,7 +14,7 @@ import { openSession, sealSession } from '@/lib/sessions/lifecycle';
 import { testDb } from '../support/db';
 
 const GLASSES = 6;
-const LINES = ['ar-dark-plum', 'ar-vanilla', 'ta-sour', 'mf-drying'] as const;
+const LINES: readonly string[] = ['ar-dark-plum', 'ar-vanilla', 'ta-sour', 'mf-drying'];
 
 export interface BenchScene {
   folder: string;
@@ -28,8 +28,8 @@ export interface BenchScene {
   countKept(opIds: readonly string[]): number;
 }
 
-/** An open profile session with that many seats taken, on a database of its own. */
-export async function makeBenchScene(seatCount: number): Promise<BenchScene> {
+/** An open profile session with that many seats taken, on a database of its own. `lines`: keys of the lexicon, all on the nose. */
+export async function makeBenchScene(seatCount: number, lines: readonly string[] = LINES): Promise<BenchScene> {
   const db = testDb();
   const at = new Date();
   const hashes = Object.fromEntries(PEOPLE.map((person) => [person.key, 'no sign-in'])) as Record<DemoPerson['key'], string>;
@@ -44,7 +44,7 @@ export async function makeBenchScene(seatCount: number): Promise<BenchScene> {
     return { label: `Barrel ${i + 1}`, pullId };
   });
   const sessionId = db.transaction((tx) => insertDraft(tx, cellarId, userIds.odo, userIds.bram, {
-    method: 'profile', title: 'Bench', instruction: 'Bench', privateQuestion: 'Bench?', samples, lines: LINES.map((key) => ({ key, phase: 'nose' as const })), flags: [],
+    method: 'profile', title: 'Bench', instruction: 'Bench', privateQuestion: 'Bench?', samples, lines: lines.map((key) => ({ key, phase: 'nose' as const })), flags: [],
     seats: seatCount, reserves: 0, replicates: 1, servingTemperatureC: 16, allergens: [], scheduledFor: at, createdAt: at,
   }));
   const leader = accessOf({ id: userIds.odo, email: '', name: '', signInId: '' }, ESTATE.slug)!;
@@ -57,7 +57,7 @@ export async function makeBenchScene(seatCount: number): Promise<BenchScene> {
   const file = process.env.DATABASE_FILE!;
   closeDb();
   return {
-    folder: path.dirname(file), joinKey, glasses: GLASSES, items: LINES.length, cookies, devices: rows.map(() => randomUUID()),
+    folder: path.dirname(file), joinKey, glasses: GLASSES, items: lines.length, cookies, devices: rows.map(() => randomUUID()),
     countKept(opIds) {
       const kept = openDatabase(file);
       const find = kept.$client.prepare("SELECT 1 FROM operations WHERE op_id = ? AND admission = 'counted'");

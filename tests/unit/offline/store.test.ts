@@ -1,6 +1,6 @@
 import 'fake-indexeddb/auto';
 import fc from 'fast-check';
-import { describe, expect, it } from 'vitest';
+import { describe, expect, it, vi } from 'vitest';
 import type { SyncRequest } from '@/lib/ballots/schema';
 import { syncSchema } from '@/lib/ballots/schema';
 import type { Sheet, SyncResponse } from '@/lib/ballots/types';
@@ -102,6 +102,52 @@ describe('the sheet’s store', () => {
       { numRuns: 1000 },
     );
   }, 120_000);
+
+  it('says loudly when nothing can be kept, tries again by itself, and loses nothing', async () => {
+    let isFull = true;
+    const kept: string[] = [];
+    const disk: Pick<PhoneDatabase, 'load' | 'keep'> = {
+      load: async () => ({ rows: [], meta: null }),
+      keep: async (rows) => {
+        if (isFull) throw new DOMException('full', 'QuotaExceededError');
+        kept.push(...rows.map((row) => row.opId));
+      },
+    };
+    const store = new SheetStore({ sheet: sheet('1'), database: disk, mirror: { read: () => [], write: () => false }, deliver: () => Promise.reject(new Error('no signal')) });
+    await store.load();
+    await store.record({ kind: 'score', block: 1, position: 1, item: 1, value: 5 });
+    expect(store.getState()).toMatchObject({ isLost: true, isUnkept: true });
+    isFull = false;
+    await vi.waitFor(() => expect(store.getState()).toMatchObject({ isLost: false, isUnkept: false, waiting: 1 }), { timeout: 8_000 });
+    expect(kept).toHaveLength(1);
+  });
+
+  it('says "sent" between sending and the receipt, and "on this phone" again when no answer came', async () => {
+    const answers: ((error: Error) => void)[] = [];
+    const store = new SheetStore({ sheet: sheet('1'), database: { load: async () => ({ rows: [], meta: null }), keep: async () => {} }, mirror: noMirror(), deliver: () => new Promise((_, reject) => answers.push(reject)) });
+    await store.load();
+    await store.record({ kind: 'score', block: 1, position: 1, item: 1, value: 5 });
+    const stateOf = () => store.getState().answers.get('1/1/line/1')!.state;
+    expect(stateOf()).toBe('on-phone');
+    const flushed = store.flush();
+    await vi.waitFor(() => expect(stateOf()).toBe('sent'));
+    expect(store.getState()).toMatchObject({ waiting: 0, sent: 1 });
+    answers[0]!(new Error('cut off'));
+    expect(await flushed).toBe(false);
+    expect(stateOf()).toBe('on-phone');
+    expect(store.getState()).toMatchObject({ waiting: 1, sent: 0, trouble: 'no-signal' });
+  });
+
+  it('nags about what has waited for more than a day', async () => {
+    let now = 1_796_000_000_000;
+    const store = new SheetStore({ sheet: sheet('1'), database: { load: async () => ({ rows: [], meta: null }), keep: async () => {} }, mirror: noMirror(), deliver: () => Promise.reject(new Error('no signal')), now: () => now });
+    await store.load();
+    await store.record({ kind: 'score', block: 1, position: 1, item: 1, value: 5 });
+    expect(store.getState().isOld).toBe(false);
+    now += 25 * 60 * 60 * 1000;
+    await store.flush();
+    expect(store.getState().isOld).toBe(true);
+  });
 
   it('says "on this phone" only after the database has it, and "received" only with a receipt', async () => {
     let finish = () => {};
