@@ -42,7 +42,7 @@ export interface BetaBinomialFit {
  * Beta-binomial model of replicated tests: person i was right x_i of n_i times.
  * Plain (no `chance`): x_i ~ Bin(n_i, p_i), p_i ~ Beta(a, b). Corrected (with `chance`):
  * p_i = chance + (1 − chance) π_i, π_i ~ Beta(a, b). mu = a/(a + b), gamma = 1/(a + b + 1); the two gammas
- * are on different scales. Maximum likelihood by Newton steps on exact derivatives; estimates to 1e-9.
+ * are on different scales. Maximum likelihood by Newton steps on exact derivatives; estimates to 1e-9 (fewer digits as gamma nears 1).
  * People with n_i = 0 say nothing and are dropped. Throws on arrays of unequal length, fewer than two people,
  * counts that are not whole or x_i > n_i (n_i up to 10 000), nobody tested more than once, chance outside (0, 1).
  * Sources: Ennis & Bi (1998) J. Sensory Stud. 13:389 (plain); Brockhoff (2003) Food Qual. Pref. 14:405 (corrected);

@@ -82,7 +82,8 @@ describe('the beta-binomial fit', () => {
       fc.property(people, fc.constantFrom(undefined, 1 / 3, 1 / 2), (rows, chance) => {
         const one = fit(rows, chance);
         for (const other of [fit(rows.toReversed(), chance), fit([[0, 0], ...rows, [0, 0]], chance)]) {
-          expect(other.logLik).toBeCloseTo(one.logLik, 9);
+          // Where everybody is always or never right, gamma runs into its upper edge and digits go there.
+          expect(other.logLik).toBeCloseTo(one.logLik, one.gamma < 0.99 ? 9 : 7);
           expect(other.boundary).toBe(one.boundary);
           if (one.gamma < 0.99) expect(other.mu).toBeCloseTo(one.mu, 5);
         }
