@@ -2,7 +2,7 @@ import { NextResponse, type NextRequest } from 'next/server';
 import { PHONE_HEADER } from '@/lib/phone/settings';
 
 /** Pages in the device's language: sheets, joining, seats, pulling. */
-const PHONE_PAGES = /^\/(t|j|seat|offline|pull)(\/|$)/;
+const PHONE_PAGES = /^\/(t|j|seat|offline|pull|check)(\/|$)/;
 
 /** What every answer says to the browser, whatever the page. */
 const HEADERS: Record<string, string> = {

@@ -1,11 +1,13 @@
 import Link from 'next/link';
-import { Door } from '@/components/ui/door';
+import { PhonePage } from '@/components/phone/phone-page';
+import { phoneWords } from '@/lib/i18n/server';
 
-export default function NotFound() {
+export default async function NotFound() {
+  const { t, list } = await phoneWords('nothing');
   return (
-    <Door title="Nothing here">
-      <p>There is nothing at this address, or it is not yours to see.</p>
-      <p><Link href="/">Go to your cellar</Link> or <Link href="/j">join a session</Link>.</p>
-    </Door>
+    <PhonePage title={t('nothing.title')} list={list}>
+      <p>{t('nothing.words')}</p>
+      <p className="row wrap"><Link href="/">{t('nothing.cellar')}</Link> <Link href="/j">{t('nothing.join')}</Link></p>
+    </PhonePage>
   );
 }

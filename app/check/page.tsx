@@ -1,14 +1,18 @@
 import type { Metadata } from 'next';
 import { CheckForm } from '@/components/check/check-form';
-import { Door } from '@/components/ui/door';
+import { PhonePage } from '@/components/phone/phone-page';
+import { phoneWords } from '@/lib/i18n/server';
 
-export const metadata: Metadata = { title: 'Check a plan' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('check')).t('check.title') };
+}
 
-export default function CheckPage() {
+export default async function CheckPage() {
+  const { t, list } = await phoneWords('check');
   return (
-    <Door title="Was the plan changed?">
-      <p>At sealing a number was published: the SHA-256 of one file with the whole plan. Take the file and hold it against the number, here or with <code>sha256sum</code>.</p>
+    <PhonePage title={t('check.ask')} list={list}>
+      <p>{t('check.how')}</p>
       <CheckForm commitment="" />
-    </Door>
+    </PhonePage>
   );
 }

@@ -3,6 +3,7 @@
 import { sha256 } from '@noble/hashes/sha2.js';
 import { bytesToHex } from '@noble/hashes/utils.js';
 import { useId, useState } from 'react';
+import { useWords } from '@/components/i18n/words';
 import { Ring } from '@/components/ui/ring';
 
 /**
@@ -10,6 +11,7 @@ import { Ring } from '@/components/ui/ring';
  * on plain http), and holds it beside the commitment. Nothing is sent anywhere.
  */
 export function CheckForm({ commitment }: { commitment: string }) {
+  const t = useWords();
   const [expected, setExpected] = useState(commitment);
   const [found, setFound] = useState<{ name: string; hex: string } | null>(null);
   const codeId = useId();
@@ -19,17 +21,17 @@ export function CheckForm({ commitment }: { commitment: string }) {
   return (
     <div className="stack">
       <div className="field">
-        <label htmlFor={codeId}>Commitment, 64 digits</label>
+        <label htmlFor={codeId}>{t('check.digits')}</label>
         <input id={codeId} className="input" value={expected} onChange={(event) => setExpected(event.target.value)} spellCheck={false} autoComplete="off" />
       </div>
       <div className="field">
-        <label htmlFor={fileId}>Plan file</label>
+        <label htmlFor={fileId}>{t('check.file')}</label>
         <input id={fileId} className="input" type="file" onChange={(event) => void take(event.target.files?.[0])} />
       </div>
       {found && (
         <div className={found.hex === wanted ? 'saved' : 'caution'} role="status">
-          <p className="row"><Ring state={found.hex === wanted ? 'done' : 'waits'} /><b>{found.hex === wanted ? 'It fits: the plan was not changed.' : 'It does not fit.'}</b></p>
-          <p className="note" style={{ overflowWrap: 'anywhere' }}>SHA-256 of {found.name}: {found.hex}</p>
+          <p className="row"><Ring state={found.hex === wanted ? 'done' : 'waits'} /><b>{found.hex === wanted ? t('check.fits') : t('check.fitsNot')}</b></p>
+          <p className="note" style={{ overflowWrap: 'anywhere' }}>{t('check.hashOf', found)}</p>
         </div>
       )}
     </div>

@@ -1,29 +1,33 @@
 import type { Metadata } from 'next';
 import { notFound } from 'next/navigation';
 import { CheckForm } from '@/components/check/check-form';
-import { Door } from '@/components/ui/door';
+import { PhonePage } from '@/components/phone/phone-page';
 import { Hash } from '@/components/ui/hash';
 import { findCommitment } from '@/lib/blind/read-key';
+import { phoneWords } from '@/lib/i18n/server';
 
-export const metadata: Metadata = { title: 'Check a plan' };
+export async function generateMetadata(): Promise<Metadata> {
+  return { title: (await phoneWords('check')).t('check.title') };
+}
 
 export default async function CheckCommitmentPage({ params }: PageProps<'/check/[commitment]'>) {
   const { commitment } = await params;
   const found = findCommitment(commitment);
   if (!found) notFound();
+  const { t, list } = await phoneWords('check');
   return (
-    <Door title={found.title}>
-      <p>Sealed {found.sealedAt.toISOString().slice(0, 16).replace('T', ' ')} UTC under</p>
+    <PhonePage title={found.title} list={list}>
+      <p>{t('check.sealed', { when: found.sealedAt.toISOString().slice(0, 16).replace('T', ' ') })}</p>
       <p className="hash"><Hash hex={commitment} /></p>
       {found.isPublished ? (
         <>
-          <p><a className="btn btn-main" href={`/api/v1/commitments/${commitment}`} download>Get the plan file</a></p>
-          <p className="soft"><code>sha256sum</code> of it prints the number above. Or check here:</p>
+          <p><a className="btn btn-main" href={`/api/v1/commitments/${commitment}`} download>{t('check.get')}</a></p>
+          <p className="soft">{t('check.prints')}</p>
           <CheckForm commitment={commitment} />
         </>
       ) : (
-        <p>The plan file is published when the key is opened, after the session is closed. Come back then and hold it against this number.</p>
+        <p>{t('check.later')}</p>
       )}
-    </Door>
+    </PhonePage>
   );
 }
