@@ -55,6 +55,10 @@ function compare(expected: unknown, actual: unknown, units: number, binding: boo
     const reach = isWhole ? 0 : units * expected.unit * (1 + 1e-9);
     if (typeof actual !== 'number' || Math.abs(actual - expected.value) > reach) outcome.differences.push(`${path}: ${expected.text} expected, ${String(actual)} computed`);
   } else if (Array.isArray(expected) || (expected !== null && typeof expected === 'object')) {
+    // More rows than printed are wrong rows. Not so for `published`, which may quote a part, and where length alone must not make a negative control.
+    if (binding && Array.isArray(expected) && Array.isArray(actual) && actual.length > expected.length) {
+      outcome.differences.push(`${path}: ${expected.length} items expected, ${actual.length} computed`);
+    }
     for (const [key, inner] of Object.entries(expected)) {
       if (SKIPPED_PARTS[key] && !Array.isArray(expected)) continue;
       compare(inner, (actual as Record<string, unknown> | undefined)?.[key], units, binding, `${path}.${key}`, outcome);

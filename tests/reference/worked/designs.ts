@@ -32,7 +32,9 @@ export const answers: WorkedAnswerer[] = [
       const designs = inputs.designs as [number, number, number, number, number][];
       const counted = designs.every(([t, k, b, r, lambda]) => {
         const design = blockDesigns().find((entry) => entry.t === t && entry.k === k && entry.r === r) ?? findBlockDesign(t, k);
-        const balance = checkBalance(design.blocks, t);
+        // Several rounds of the smallest design are a design too: its blocks are laid out as often as fits the r asked for.
+        const rounds = Math.max(1, Math.floor(r / design.r));
+        const balance = checkBalance(Array.from({ length: rounds }, () => design.blocks).flat(), t);
         return balance.balancedIncompleteBlock && balance.sequences === b && balance.replication[0] === r && balance.concurrence[0][1] === lambda;
       });
       return { all_hold: counted };

@@ -17,13 +17,28 @@ import {
 } from '@/stats';
 import type { WorkedAnswerer } from './types';
 
-/** The protocol that a test's name begins with. */
+/** Words by which a test's name says its protocol. Where it lists several, they share one chance and the first will do. */
+const WORDS: readonly (readonly [RegExp, Protocol])[] = [
+  [/triangle|guessing 1\/3/, 'triangle'],
+  [/duo-trio/, 'duo_trio'],
+  [/paired|directional|2-AFC/, 'two_afc'],
+  [/tetrad/, 'tetrad'],
+  [/3-AFC/, 'three_afc'],
+  [/two[- ](out[- ])?of[- ]five/, 'two_out_of_five'],
+];
+
+/** The protocol that a test's name says. */
 function protocolOf(test: string): Protocol {
-  if (/^triangle|guessing 1\/3/.test(test)) return 'triangle';
-  if (/duo-trio/.test(test)) return 'duo_trio';
-  if (/paired|2-AFC/.test(test)) return 'two_afc';
-  throw new Error(`${test} names no protocol`);
+  const found = WORDS.find(([word]) => word.test(test));
+  if (!found) throw new Error(`${test} names no protocol`);
+  return found[1];
 }
+
+/** Names of `inputs` under which some examples keep the data of one protocol, and of its part of the answer. */
+const NAMED_PROTOCOLS: readonly (readonly [string, string, Protocol])[] = [
+  ['triangle', 'triangle', 'triangle'],
+  ['duo_trio', 'duo', 'duo_trio'],
+];
 
 const THURSTONE: Readonly<Record<string, ThurstoneProtocol>> = {
   '2-AFC': 'two_afc',
@@ -33,27 +48,34 @@ const THURSTONE: Readonly<Record<string, ThurstoneProtocol>> = {
   tetrad: 'tetrad',
 };
 
-/** Panels whose tables the examples print. */
-const SIZES = Array.from({ length: 200 }, (_, i) => i + 1);
-const RISKS = [0.2, 0.1, 0.05, 0.01, 0.001];
+/** Panels whose tables the examples print: the sizes stand only in the results, so all are computed. */
+const SIZES = Array.from({ length: 500 }, (_, i) => i + 1);
+/** Shares of distinguishers whose tables the examples print: they stand only in the results, so all are computed. */
+const SHARES = [0.6, 0.5, 0.4, 0.3, 0.2, 0.1];
+
+/** The numbers of a heading such as "alpha 0.20 0.10 0.05". */
+const numbersOf = (heading: unknown): number[] => [...String(heading).matchAll(/\d*\.\d+/g)].map(([number]) => Number(number));
 
 interface Counted {
   n: number;
   correct?: number;
   agreeing?: number;
+  alpha?: number;
 }
 
 export const answers: WorkedAnswerer[] = [
   {
     matches: ({ inputs }) => typeof inputs.n === 'number' && ('correct' in inputs || 'agreeing' in inputs),
     answer({ test, inputs }) {
-      const { n, correct, agreeing } = inputs as unknown as Counted;
+      const { n, correct, agreeing, alpha = 0.05 } = inputs as unknown as Counted;
       const chance = CHANCE[protocolOf(test)];
       const right = correct ?? agreeing!;
       const { p, twoSided } = binomialTest({ correct: right, n, chance });
-      const smallest = minimumCorrect(n, 0.05, chance);
+      const smallest = minimumCorrect(n, alpha, chance);
+      // Some names say the level themselves, whatever level the example was tested at.
+      const atFive = minimumCorrect(n, 0.05, chance);
       const z = (right - n * chance) / Math.sqrt(n * chance * (1 - chance));
-      return { p, p_exact: p, p_one: p, p_two: twoSided, min: smallest, min_correct: smallest, min_correct_5pct: smallest, min_5pct: smallest, z, large_sample_z: z, p_normal: normalSf(z) };
+      return { p, p_exact: p, p_one: p, p_two: twoSided, min: smallest, min_correct: smallest, min_correct_5pct: atFive, min_5pct: atFive, z, large_sample_z: z, p_normal: normalSf(z) };
     },
   },
   {
@@ -67,10 +89,11 @@ export const answers: WorkedAnswerer[] = [
   },
   {
     matches: ({ inputs }) => typeof inputs.rows === 'string' && /^alpha/.test(inputs.rows),
-    answer({ test }) {
+    answer({ test, inputs }) {
       const chance = CHANCE[protocolOf(test)];
+      const [alphas, betas] = [numbersOf(inputs.rows), numbersOf(inputs.columns)];
       const size = (alpha: number, beta: number, pd: number) => smallestPanel(1 - beta, { alpha, chance, pc: proportionFromDistinguishers(pd, chance) }).first;
-      return Object.fromEntries([0.5, 0.4, 0.3, 0.2, 0.1].map((pd) => [String(pd), RISKS.map((alpha) => RISKS.map((beta) => size(alpha, beta, pd)))]));
+      return Object.fromEntries(SHARES.map((pd) => [String(pd), alphas.map((alpha) => betas.map((beta) => size(alpha, beta, pd)))]));
     },
   },
   {
@@ -95,7 +118,6 @@ export const answers: WorkedAnswerer[] = [
   {
     matches: ({ test }) => /proportion of distinguishers/.test(test),
     answer({ inputs }) {
-      const { triangle, duo_trio } = inputs as { triangle: [number, number][]; duo_trio: [number, number][] };
       const table = (pairs: [number, number][], chance: number) =>
         Object.fromEntries(
           pairs.map(([n, correct]) => {
@@ -104,14 +126,16 @@ export const answers: WorkedAnswerer[] = [
             return [`${correct}/${n}`, { pd, s, lower: pd - 1.645 * s, upper: pd + 1.645 * s }];
           }),
         );
-      return { triangle: table(triangle, CHANCE.triangle), duo: table(duo_trio, CHANCE.duo_trio) };
+      const present = NAMED_PROTOCOLS.filter(([key]) => key in inputs);
+      return Object.fromEntries(present.map(([key, name, protocol]) => [name, table(inputs[key] as [number, number][], CHANCE[protocol])]));
     },
   },
   {
-    matches: ({ inputs }) => typeof inputs.triangle === 'string' && Array.isArray(inputs.n),
+    matches: ({ inputs }) => NAMED_PROTOCOLS.some(([key]) => typeof inputs[key] === 'string') && Array.isArray(inputs.n),
     answer({ inputs }) {
-      const [beta, pd] = /beta ([\d.]+), pd ([\d.]+)/.exec(inputs.triangle as string)!.slice(1).map(Number);
-      return Object.fromEntries((inputs.n as number[]).map((n) => [String(n), similarityMaximum(n, { beta, pd, chance: CHANCE.triangle })]));
+      const [key, , protocol] = NAMED_PROTOCOLS.find(([name]) => typeof inputs[name] === 'string')!;
+      const [beta, pd] = /beta ([\d.]+), pd ([\d.]+)/.exec(inputs[key] as string)!.slice(1).map(Number);
+      return Object.fromEntries((inputs.n as number[]).map((n) => [String(n), similarityMaximum(n, { beta, pd, chance: CHANCE[protocol] })]));
     },
   },
   {

@@ -57,10 +57,10 @@ export const answers: WorkedAnswerer[] = [
     },
   },
   {
-    matches: (e) => /^Page 5 % limits, (\d+) conditions/.test(e.test),
+    matches: (e) => /^Page [\d.]+ % limits, \d+ conditions/.test(e.test),
     answer({ test, inputs }) {
-      const conditions = Number(/(\d+) conditions/.exec(test)![1]);
-      return { L: (inputs.subjects as number[]).map((n) => pageCriticalL(conditions, n, 0.05)) };
+      const [percent, conditions] = /^Page ([\d.]+) % limits, (\d+) conditions/.exec(test)!.slice(1).map(Number);
+      return { L: (inputs.subjects as number[]).map((n) => pageCriticalL(conditions, n, percent / 100)) };
     },
   },
   {
