@@ -1,6 +1,5 @@
 'use client';
 
-import { useCallback, useEffect, useRef, useState } from 'react';
 import { useWords } from '@/components/i18n/words';
 import type { SheetItem } from '@/lib/ballots/types';
 import { commentKey, faultKey, scoreKey } from '@/lib/offline/answers';
@@ -11,11 +10,9 @@ import { afterRest, codeAt, linesOf, nextGlass, phasesOf, sealShort } from './fl
 import { GlassLabel } from './glass-label';
 import { KeptLine, Trouble } from './kept-line';
 import { LineScale } from './line-scale';
-import { phaseWord } from './words';
 import type { SheetPart } from './sheet-part';
-
-/** Keys and fine steps come in bursts: the last of a burst is what is kept. */
-const BURST_MS = 250;
+import { useLineDraft } from './use-line-draft';
+import { phaseWord } from './words';
 
 /** One part of one glass: the code, its lines, the way on. */
 export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
@@ -28,65 +25,20 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
   const lines = items.filter((item) => item.kind === 'line');
   const flags = items.filter((item) => item.kind === 'flag');
   const isClosed = state.sessionState !== 'open';
-  const [touched, setTouched] = useState<number | null>(null);
-  const [draft, setDraft] = useState<{ item: number; value: number } | null>(null);
-  /** What the touched line was before its last burst, for Undo. */
-  const [before, setBefore] = useState<{ item: number; value: number | null } | null>(null);
-  const burst = useRef<ReturnType<typeof setTimeout>>(undefined);
+  const { draft, touched, before, acts } = useLineDraft(store, block, position);
 
-  const keptValue = (item: number): number | null => {
-    const op = state.answers.get(scoreKey(block, position, item))?.op;
+  const valueOf = (line: SheetItem): number | null => {
+    if (draft?.item === line.item) return draft.value;
+    const op = state.answers.get(scoreKey(block, position, line.item))?.op;
     return op?.kind === 'score' ? op.value : null;
   };
-  const valueOf = (line: SheetItem): number | null => (draft?.item === line.item ? draft.value : keptValue(line.item));
-  const keep = (item: number, value: number) => {
-    setDraft(null);
-    void store.record({ kind: 'score', block, position, item, value });
-  };
-  const set = (item: number, value: number) => {
-    clearTimeout(burst.current);
-    if (draft && draft.item !== item) keep(draft.item, draft.value);
-    setTouched(item);
-    if (draft?.item !== item) setBefore({ item, value: keptValue(item) });
-    setDraft({ item, value });
-    burst.current = setTimeout(() => keep(item, value), BURST_MS);
-  };
-  const settle = () => {
-    clearTimeout(burst.current);
-    if (draft) keep(draft.item, draft.value);
-  };
-  const clear = (item: number) => {
-    clearTimeout(burst.current);
-    setBefore({ item, value: draft?.item === item ? draft.value : keptValue(item) });
-    setDraft(null);
-    void store.record({ kind: 'clear', block, position, item });
-  };
-  const undo = (last: { item: number; value: number | null }) => {
-    clearTimeout(burst.current);
-    setBefore(null);
-    setDraft(null);
-    if (last.value === null) void store.record({ kind: 'clear', block, position, item: last.item });
-    else keep(last.item, last.value);
-  };
-
-  const touch = (item: number) => {
-    if (draft && draft.item !== item) settle();
-    setTouched(item);
-  };
-  const acts = useRef({ set, clear, touch });
-  useEffect(() => {
-    acts.current = { set, clear, touch };
-  });
-  const onSet = useCallback((item: number, value: number) => acts.current.set(item, value), []);
-  const onClear = useCallback((item: number) => acts.current.clear(item), []);
-  const onTouch = useCallback((item: number) => acts.current.touch(item), []);
 
   const untouched = lines.filter((line) => valueOf(line) === null).length;
   const glasses = sheet.blocks.find((candidate) => candidate.block === block)!.glasses;
   const active = lines.find((line) => line.item === touched);
   const activeValue = active ? valueOf(active) : null;
   const onNext = () => {
-    settle();
+    acts.settle();
     const nextPhase = phases[part + 1];
     if (nextPhase) return go({ ...place, phase: nextPhase });
     const next = nextGlass(sheet, place);
@@ -94,7 +46,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
     go(afterRest(sheet, { ...next, phase: phases[0]! }));
   };
   const onBack = () => {
-    settle();
+    acts.settle();
     if (part > 0) return go({ ...place, phase: phases[part - 1]! });
     go({ ...place, position: position - 1, phase: phases.at(-1)! });
   };
@@ -116,7 +68,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
         <LineScale
           key={`${block}/${position}/${line.item}`} line={line} value={valueOf(line)} isActive={touched === line.item} isClosed={isClosed}
           kept={draft?.item === line.item ? 'saving' : (state.answers.get(scoreKey(block, position, line.item))?.state ?? null)}
-          onSet={onSet} onClear={onClear} onTouch={onTouch}
+          onSet={acts.set} onClear={acts.clear} onTouch={acts.touch}
         />
       ))}
       {flags.length > 0 && (
@@ -144,8 +96,8 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
       <footer className="foot-bar">
         {active && (activeValue !== null || before?.item === active.item) && !isClosed && (
           <FineSteps
-            name={active.name} value={activeValue ?? 50} onStep={(value) => set(active.item, value)} onClear={() => clear(active.item)}
-            onUndo={before?.item === active.item ? () => undo(before) : null}
+            name={active.name} value={activeValue ?? 50} onStep={(value) => acts.set(active.item, value)} onClear={() => acts.clear(active.item)}
+            onUndo={before?.item === active.item ? () => acts.undo(before) : null}
           />
         )}
         <div className="acts">

@@ -1,20 +1,10 @@
 'use client';
 
-import { useEffect, useRef, useState } from 'react';
+import { useEffect, useRef } from 'react';
 import { useWords } from '@/components/i18n/words';
+import { useSecondsLeft } from '@/components/phone/use-seconds-left';
 import { Code } from '@/components/ui/code';
 import { chime } from '@/lib/phone/feel';
-
-/** Whole seconds until a moment, counted once a second. */
-export function useSecondsLeft(until: number | null): number {
-  const [now, setNow] = useState(() => Date.now());
-  useEffect(() => {
-    if (until === null) return;
-    const tick = setInterval(() => setNow(Date.now()), 500);
-    return () => clearInterval(tick);
-  }, [until]);
-  return until === null ? 0 : Math.max(0, Math.ceil((until - now) / 1000));
-}
 
 function RestRing({ left, total, label, size = 240 }: { left: number; total: number; label: string; size?: number }) {
   const c = size / 2;
