@@ -9,7 +9,7 @@ import type { PhonePull } from '@/lib/pulls/schema';
 /** After a pull: what goes on the bottle, whether it was received, the next barrel. */
 export function PullKept({ barrel, pull, state, onNext }: { barrel: PullBarrel; pull: PhonePull; state: PullState; onNext(): void }) {
   const t = useWords();
-  const row = state.rows.find((candidate) => candidate.opId === pull.opId);
+  const isReceived = state.rows.find((candidate) => candidate.opId === pull.opId)?.state === 'received';
   const when = new Intl.DateTimeFormat(t.locale, { dateStyle: 'medium', timeStyle: 'short' }).format(pull.pulledAt);
   return (
     <>
@@ -20,7 +20,7 @@ export function PullKept({ barrel, pull, state, onNext }: { barrel: PullBarrel; 
           <div className="fields"><span>{barrel.lot}</span><span>{when}</span><span>{pull.volumeMl} mL</span></div>
         </div>
         <p className="soft no-print">{t('pull.labelWords')}</p>
-        <p className="row no-print" role="status"><Ring state={row?.state === 'received' ? 'done' : 'open'} /> {row?.state === 'received' ? t('kept.received') : t('kept.onPhone')}</p>
+        {(!state.isLost || isReceived) && <p className="row no-print" role="status"><Ring state={isReceived ? 'done' : 'open'} /> {isReceived ? t('kept.received') : t('kept.onPhone')}</p>}
         <p className="no-print"><button type="button" className="btn" onClick={() => window.print()}>{t('pull.printLabel')}</button></p>
       </div>
       <footer className="foot-bar no-print"><button type="button" className="btn btn-main wide" onClick={onNext}>{t('pull.nextBarrel')}</button></footer>

@@ -1,7 +1,7 @@
 'use client';
 
 import { useState, type ReactNode } from 'react';
-import { useSecondsLeft } from '@/components/ballot/rest-screen';
+import { useSecondsLeft } from '@/components/phone/use-seconds-left';
 import { useWords } from '@/components/i18n/words';
 import type { MessageKey } from '@/lib/i18n/words';
 import type { PullBarrel } from '@/lib/pulls/loaders';

@@ -7,7 +7,7 @@ export interface PullState {
   /** This hand's pulls in this cellar, newest first. */
   rows: readonly PullRow[];
   waiting: number;
-  /** Could not be kept on this phone. */
+  /** Something could not be kept on this phone. */
   isLost: boolean;
   trouble: 'no-signal' | 'signed-out' | null;
 }
@@ -29,7 +29,9 @@ export class PullStore {
   private listeners = new Set<() => void>();
   private delivering: Promise<boolean> | null = null;
   private isReady = false;
-  private isLost = false;
+  /** Ids of pulls that are in this page only: the phone would not keep them. */
+  private unkept = new Set<string>();
+  private isUnreadable = false;
   private trouble: PullState['trouble'] = null;
   private snapshot: PullState;
 
@@ -51,7 +53,7 @@ export class PullStore {
         if (row.cellar === this.parts.cellar && row.userId === this.parts.userId) this.rows.set(row.opId, row);
       }
     } catch {
-      this.isLost = true;
+      this.isUnreadable = true;
     }
     this.isReady = true;
     this.changed();
@@ -64,15 +66,20 @@ export class PullStore {
     return this.write([row]);
   }
 
-  private async write(rows: PullRow[]): Promise<boolean> {
+  /** Writes these and whatever could not be kept before. @returns whether all of it is on this phone */
+  private async write(rows: readonly PullRow[]): Promise<boolean> {
+    for (const row of rows) this.unkept.add(row.opId);
+    const owed = [...this.unkept].flatMap((opId) => this.rows.get(opId) ?? []);
     try {
-      await this.parts.database.keepPulls(rows);
-      this.isLost = false;
+      await this.parts.database.keepPulls(owed);
+      // A later state of the same pull may have come meanwhile; it has a write of its own.
+      for (const row of owed) if (this.rows.get(row.opId) === row) this.unkept.delete(row.opId);
+      this.isUnreadable = false;
     } catch {
-      this.isLost = true;
+      // They stay in `unkept`, which is what the screen says.
     }
     this.changed();
-    return !this.isLost;
+    return this.unkept.size === 0;
   }
 
   /** Sends what waits. @returns whether nothing waits any more */
@@ -84,6 +91,7 @@ export class PullStore {
   }
 
   private async deliverAll(): Promise<boolean> {
+    if (this.unkept.size > 0) await this.write([]);
     for (;;) {
       const waiting = [...this.rows.values()].filter((row) => row.state === 'waiting').slice(0, BATCH);
       if (waiting.length === 0) {
@@ -119,7 +127,7 @@ export class PullStore {
 
   private derive(): PullState {
     const rows = [...this.rows.values()].sort((a, b) => b.pull.pulledAt - a.pull.pulledAt);
-    return { isReady: this.isReady, rows, waiting: rows.filter((row) => row.state === 'waiting').length, isLost: this.isLost, trouble: this.trouble };
+    return { isReady: this.isReady, rows, waiting: rows.filter((row) => row.state === 'waiting').length, isLost: this.isUnreadable || this.unkept.size > 0, trouble: this.trouble };
   }
 
   private changed(): void {

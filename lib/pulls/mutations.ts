@@ -1,6 +1,6 @@
 import 'server-only';
 import { getDb, type Tx } from '@/db/client';
-import { pulls } from '@/db/schema';
+import { fills, pulls } from '@/db/schema';
 import { and, eq } from 'drizzle-orm';
 import { requireCapability, type Access } from '../auth/access';
 import { now } from '../clock';
@@ -13,11 +13,19 @@ const AHEAD_MS = 5 * 60_000;
 
 const noteOf = ({ colour, note }: PhonePull): string => [colour && `Colour: ${colour}.`, note].filter(Boolean).join(' ');
 
-/** Whether the stored pull says what this one says: a repeat of the same delivery. */
+/** What a pull says, but for its time: a clock that ran ahead was set right. */
+const FACTS = ['drawMethod', 'volumeMl', 'temperatureC', 'evaporationS', 'isVented', 'isHissHeard', 'isToppedUp'] as const;
+
+/** Whether the stored pull says what this one says: a repeat of the same delivery. Null when there is none. */
 function isRepeat(tx: Tx, access: Access, pull: PhonePull): boolean | null {
-  const kept = tx.select().from(pulls).where(and(eq(pulls.id, pull.opId), eq(pulls.cellarId, access.cellar.id))).get();
+  const kept = tx
+    .select({ pull: pulls, vesselId: fills.vesselId })
+    .from(pulls)
+    .innerJoin(fills, eq(fills.id, pulls.fillId))
+    .where(and(eq(pulls.id, pull.opId), eq(pulls.cellarId, access.cellar.id)))
+    .get();
   if (!kept) return null;
-  return kept.pulledBy === access.user.id && kept.volumeMl === pull.volumeMl && kept.drawMethod === pull.drawMethod && kept.temperatureC === pull.temperatureC && kept.note === noteOf(pull);
+  return kept.vesselId === pull.vesselId && kept.pull.pulledBy === access.user.id && kept.pull.note === noteOf(pull) && FACTS.every((fact) => kept.pull[fact] === pull[fact]);
 }
 
 /**

@@ -30,7 +30,9 @@ describe('pulls of a phone', () => {
   it('with a known id and other content are refused, and the first stays', () => {
     const first = pull();
     takePulls(scene.access('ines'), [first]);
-    expect(takePulls(scene.access('ines'), [{ ...first, volumeMl: 900 }]).refused).toHaveLength(1);
+    const other = scene.db.select().from(fills).where(eq(fills.cellarId, scene.cellarId)).all().find((fill) => fill.vesselId !== vesselId)!.vesselId;
+    const changes: Partial<PhonePull>[] = [{ volumeMl: 900 }, { isToppedUp: true }, { evaporationS: 30 }, { colour: 'amber' }, { vesselId: other }];
+    for (const change of changes) expect(takePulls(scene.access('ines'), [{ ...first, ...change }]).refused, JSON.stringify(change)).toHaveLength(1);
     expect(kept(first.opId)[0]!.volumeMl).toBe(120);
   });
 

@@ -92,4 +92,20 @@ describe('the pull sheet’s store', () => {
     expect(await store.record(pull(1), '31', 'x')).toBe(false);
     expect(store.getState().isLost).toBe(true);
   });
+
+  it('goes on saying so until that very pull is kept, and tries it again with the next', async () => {
+    const disk = new Disk();
+    let isFull = true;
+    const database = { loadPulls: disk.loadPulls, keepPulls: (rows: readonly PullRow[]) => (isFull ? Promise.reject(new Error('full')) : disk.keepPulls(rows)) };
+    const store = new PullStore({ cellar: 'c', userId: 'u', database, deliver: async () => Promise.reject(new Error('no network')) });
+    await store.load();
+    const [first, second] = [pull(1), pull(2)];
+    await store.record(first, '31', 'x');
+    await store.flush();
+    expect(store.getState().isLost).toBe(true);
+    isFull = false;
+    expect(await store.record(second, '32', 'x')).toBe(true);
+    expect([...disk.rows.keys()].toSorted()).toEqual([first.opId, second.opId].toSorted());
+    expect(store.getState().isLost).toBe(false);
+  });
 });
