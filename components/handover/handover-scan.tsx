@@ -37,8 +37,8 @@ export function HandoverScan({ url }: { url: string }) {
       finish({ result: null, refusal: 'This device has lost the server. Scan again when it is back: nothing counts twice.' });
     }
   };
-  const onCode = (code: string) => {
-    const next = collect(seen, code);
+  const onCodes = (codes: readonly string[]) => {
+    const next = codes.reduce(collect, seen);
     if (next === seen) return;
     setSeen(next);
     for (const [which, { text }] of next) {
@@ -48,13 +48,13 @@ export function HandoverScan({ url }: { url: string }) {
   };
   const onType = (event: FormEvent) => {
     event.preventDefault();
-    typed.split(/\s+/).filter(Boolean).forEach(onCode);
+    onCodes(typed.split(/\s+/).filter(Boolean));
     setTyped('');
   };
   const open = [...seen].filter(([, { text }]) => text === null);
   return (
     <div className="stack">
-      <Scanner onCode={onCode} words={CAMERA_WORDS} />
+      <Scanner onCode={(code) => onCodes([code])} words={CAMERA_WORDS} />
       {open.map(([which, { parts, total }]) => <p key={which} className="row" role="status"><Ring state="open" /> {parts.size} of {total} codes read; hold on until all have had their turn</p>)}
       <ul className="stack tight" aria-live="polite">
         {sent.map(({ which, result, refusal }) => (
