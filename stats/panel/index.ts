@@ -1,3 +1,4 @@
+export { drift, type Drift } from './drift';
 export { assessorPerformance, type AssessorPerformance } from './performance';
 export { intraclassCorrelations, type Icc, type IccForms } from './icc';
 export { pearson } from './pearson';
@@ -7,4 +8,4 @@ export { rvCoefficient } from './rv';
 export { steadyMean } from './steady-mean';
 export { fleissKappa, type FleissKappa } from './fleiss-kappa';
 export { scaleUse, type ScaleUse } from './scale-use';
-export { drift, servingEffect, type Drift, type ServedScores, type ServingEffect } from './serving-effect';
+export { servingEffect, type ServedScores, type ServingEffect } from './serving-effect';

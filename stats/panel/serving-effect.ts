@@ -1,6 +1,6 @@
 import { EigenvalueDecomposition, Matrix } from 'ml-matrix';
-import { requireFinite, requireFiniteArray, requireInteger } from '../check';
-import { fSf, tQuantile, tTwoSided } from '../distributions';
+import { requireFiniteArray, requireInteger } from '../check';
+import { fSf } from '../distributions';
 import { StatsError } from '../errors';
 
 /** Scores with who gave them, of which product, and how they were served. Levels are whole numbers from 0. */
@@ -82,7 +82,8 @@ function explained(cross: Matrix, rhs: Float64Array, size: number): { ss: number
   return { ss, rank, solution };
 }
 
-function requireServed({ assessor, product, score }: ServedScores, level: ArrayLike<number>): number {
+/** Checks what was served; the three lists of levels and the scores are equally many. @returns their number */
+export function requireServed({ assessor, product, score }: ServedScores, level: ArrayLike<number>): number {
   const n = score.length;
   requireFiniteArray(score, 'scores');
   for (const [codes, name] of [[assessor, 'assessor'], [product, 'product'], [level, 'level']] as const) {
@@ -92,67 +93,9 @@ function requireServed({ assessor, product, score }: ServedScores, level: ArrayL
   return n;
 }
 
-function highest(codes: ArrayLike<number>, n: number): number {
+/** The highest level. */
+export function highest(codes: ArrayLike<number>, n: number): number {
   let most = 0;
   for (let i = 0; i < n; i += 1) if (codes[i] > most) most = codes[i];
   return most;
-}
-
-/** How one person's scores move as a tasting goes on. `change` = slope × the span of time. */
-export interface Drift {
-  readonly slope: number;
-  readonly standardError: number;
-  readonly df: number;
-  readonly p: number;
-  readonly low: number;
-  readonly high: number;
-  readonly change: number;
-}
-
-/**
- * Drift of each assessor: the straight line of (own score − panel's mean of that product) on time (place in
- * the serving, or session), with t limits at `level`. Null for an assessor with fewer than three scores, or
- * all at one time, or without any scatter about the line.
- * Common practice. Errors as {@link servingEffect}.
- */
-export function drift(scores: ServedScores, time: ArrayLike<number>, level = 0.95): (Drift | null)[] {
-  const { assessor, product, score } = scores;
-  const n = score.length;
-  requireServed(scores, new Int32Array(n));
-  if (time.length !== n) throw new StatsError('shape', 'There must be one time for each score');
-  requireFinite(level, 'level');
-  const products = highest(product, n) + 1;
-  const sums = new Float64Array(products);
-  const counts = new Float64Array(products);
-  for (let i = 0; i < n; i += 1) {
-    requireFinite(time[i], 'time');
-    sums[product[i]] += score[i];
-    counts[product[i]] += 1;
-  }
-  const own: { t: number; y: number }[][] = Array.from({ length: highest(assessor, n) + 1 }, () => []);
-  for (let i = 0; i < n; i += 1) own[assessor[i]].push({ t: time[i], y: score[i] - sums[product[i]] / counts[product[i]] });
-  return own.map((points) => line(points, level));
-}
-
-function line(points: readonly { t: number; y: number }[], level: number): Drift | null {
-  const n = points.length;
-  if (n < 3) return null;
-  const t0 = points.reduce((sum, { t }) => sum + t, 0) / n;
-  const y0 = points.reduce((sum, { y }) => sum + y, 0) / n;
-  let stt = 0;
-  let sty = 0;
-  let syy = 0;
-  for (const { t, y } of points) {
-    stt += (t - t0) ** 2;
-    sty += (t - t0) * (y - y0);
-    syy += (y - y0) ** 2;
-  }
-  const error = stt > 0 ? syy - sty ** 2 / stt : 0;
-  if (stt === 0 || error <= 1e-12 * syy) return null;
-  const df = n - 2;
-  const slope = sty / stt;
-  const standardError = Math.sqrt(error / df / stt);
-  const reach = tQuantile((1 + level) / 2, df) * standardError;
-  const times = points.map(({ t }) => t);
-  return { slope, standardError, df, p: tTwoSided(slope / standardError, df), low: slope - reach, high: slope + reach, change: slope * (Math.max(...times) - Math.min(...times)) };
 }

@@ -165,7 +165,7 @@ describe('the sheet on a phone', () => {
       for (let line = 0; line < 4; line += 1) await tapLine(page, line, 0.2 + 0.2 * line);
       // "received" may only be said with a receipt: the database is asked below. Three of five requests go
       // wrong, and the phone waits up to a minute between tries: in 1,000 sheets one waits for seven minutes.
-      await page.locator('.label .foot', { hasText: 'all received' }).waitFor({ timeout: WAIT_MS });
+      for (let line = 0; line < 4; line += 1) await page.locator('.item').nth(line).locator('.state', { hasText: 'received' }).waitFor({ timeout: WAIT_MS });
       const ids = await page.evaluate(async () => {
         const request = indexedDB.open('tercet');
         const db = await new Promise<IDBDatabase>((resolve) => (request.onsuccess = () => resolve(request.result)));

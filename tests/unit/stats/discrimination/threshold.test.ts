@@ -71,6 +71,15 @@ describe('best-estimate thresholds (ASTM E679, the rule from memory)', () => {
     );
   });
 
+  it('do not care in which order people come', () => {
+    fc.assert(
+      fc.property(table, ({ concentrations, correct }) => {
+        expect(bestEstimateThreshold(concentrations, correct.toReversed()).group / bestEstimateThreshold(concentrations, correct).group).toBeCloseTo(1, 12);
+      }),
+      { seed: 3 },
+    );
+  });
+
   it('have no spread for one person', () => {
     expect(bestEstimateThreshold([1, 2], [series('-+')])).toMatchObject({ log10Sd: null, belowRange: 0, aboveRange: 0 });
   });

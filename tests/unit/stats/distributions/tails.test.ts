@@ -22,7 +22,6 @@ import {
   normalPdf,
   normalQuantile,
   normalSf,
-  StatsError,
   tCdf,
   tQuantile,
   tSf,
@@ -118,18 +117,4 @@ describe('quadrature', () => {
   });
 
   it('knows the factorials', () => close(Math.exp(logGamma(11)), 3_628_800));
-});
-
-describe('hostile input', () => {
-  it.each([
-    ['NaN', () => normalSf(NaN)],
-    ['NaN for t', () => tTwoSided(NaN, 5)],
-    ['df 0', () => tQuantile(0.9, 0)],
-    ['negative df', () => fSf(1, -1, 5)],
-    ['probability above 1', () => fQuantile(1.2, 3, 5)],
-    ['probability below 0', () => chiSquareQuantile(-0.1, 3)],
-    ['a fraction of an answer', () => binomialSf(1, 2.5, 0.5)],
-    ['a probability of 2', () => binomialPmf(1, 3, 2)],
-    ['no nodes', () => gaussLegendre(0)],
-  ])('%s is refused', (_, work) => expect(work).toThrow(StatsError));
 });
