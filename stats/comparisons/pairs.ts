@@ -3,7 +3,7 @@ import { studentizedRangeQuantile, studentizedRangeTail, tQuantile, tTwoSided } 
 import { StatsError } from '../errors';
 
 export interface PairQuestion {
-  /** One mean for each product. */
+  /** One mean for each product; at most 2,000. */
   readonly means: ArrayLike<number>;
   /** Scores behind each mean: one number for all, or one for each (Tukey–Kramer). */
   readonly n: number | ArrayLike<number>;
@@ -34,9 +34,13 @@ export interface Comparisons {
   readonly criticalDifference: number | null;
 }
 
+/** Pairs grow with the square of the means. */
+const MOST_MEANS = 2000;
+
 function requireQuestion({ means, n, ms, df, alpha }: PairQuestion): void {
   requireFiniteArray(means, 'means');
   if (means.length < 2) throw new StatsError('too_few', 'A comparison needs at least two means');
+  if (means.length > MOST_MEANS) throw new StatsError('out_of_range', `Pairs are compared for at most ${MOST_MEANS} means`);
   requireFinite(ms, 'mean square');
   if (ms <= 0) throw new StatsError('constant', 'The error mean square is 0: the scores leave nothing to judge differences by');
   requireFinite(df, 'degrees of freedom');

@@ -47,7 +47,11 @@ function line(points: readonly { t: number; y: number }[], level: number): Drift
   let stt = 0;
   let sty = 0;
   let syy = 0;
+  let first = Infinity;
+  let last = -Infinity;
   for (const { t, y } of points) {
+    first = Math.min(first, t);
+    last = Math.max(last, t);
     stt += (t - t0) ** 2;
     sty += (t - t0) * (y - y0);
     syy += (y - y0) ** 2;
@@ -58,6 +62,5 @@ function line(points: readonly { t: number; y: number }[], level: number): Drift
   const slope = sty / stt;
   const standardError = Math.sqrt(error / df / stt);
   const reach = tQuantile((1 + level) / 2, df) * standardError;
-  const times = points.map(({ t }) => t);
-  return { slope, standardError, df, p: tTwoSided(slope / standardError, df), low: slope - reach, high: slope + reach, change: slope * (Math.max(...times) - Math.min(...times)) };
+  return { slope, standardError, df, p: tTwoSided(slope / standardError, df), low: slope - reach, high: slope + reach, change: slope * (last - first) };
 }

@@ -1,6 +1,7 @@
 import { Matrix } from 'ml-matrix';
 import { requireInteger } from '../check';
 import { StatsError } from '../errors';
+import { crossInner } from '../panel/rv';
 import { centre, columnSpread, fixSigns, thinSvd, toMatrix } from './svd';
 
 /** One group of variables on the objects that all groups share. */
@@ -109,11 +110,6 @@ function weigh({ table, scale }: MfaGroup, g: number): { matrix: Matrix; first: 
 
 /** RV = tr(Wa Wb)/sqrt(tr(Wa Wa) tr(Wb Wb)), with W = X X'. */
 function rvMatrix(tables: Matrix[]): number[][] {
-  const products = tables.map((x) => {
-    const w = x.mmul(x.transpose());
-    return w.to1DArray();
-  });
-  const dot = (a: number[], b: number[]) => a.reduce((sum, value, i) => sum + value * b[i], 0);
-  const size = products.map((w) => Math.sqrt(dot(w, w)));
-  return products.map((a, i) => products.map((b, j) => (i === j ? 1 : dot(a, b) / (size[i] * size[j]))));
+  const own = tables.map((x) => crossInner(x, x));
+  return tables.map((a, i) => tables.map((b, j) => (i === j ? 1 : crossInner(a, b) / Math.sqrt(own[i] * own[j]))));
 }

@@ -39,6 +39,8 @@ export interface ProcrustesResult {
 }
 
 const MOST_ROUNDS = 5000;
+/** Scores over all sets; each round of each start goes through all of them. */
+const MOST_SCORES = 200_000;
 
 /**
  * Generalized Procrustes analysis: brings the assessors' own configurations of the products to one consensus.
@@ -49,7 +51,8 @@ const MOST_ROUNDS = 5000;
  * the best one reached; `optima` says how many others there were. Sets may have different variables: narrower ones are
  * filled with columns of 0.
  *
- * @param sets at least two, each objects (rows, at least two, in one order) by variables; no missing values.
+ * @param sets at least two, each objects (rows, at least two, in one order) by variables; no missing values; at most
+ * 200,000 scores in all.
  * @throws StatsError `empty`, `too_few`, `shape`, `not_finite`, `constant` (a set tells no two objects apart),
  * `no_convergence`, `not_integer`, `out_of_range`.
  * Source: Gower (1975) Psychometrika 40:33; Ten Berge (1977) Psychometrika 42:267. Checked against R 4.2.2 to 1e-6.
@@ -90,6 +93,8 @@ interface Fit {
 
 function prepared(sets: ReadonlyArray<ReadonlyArray<ArrayLike<number>>>): Matrix[] {
   if (sets.length < 2) throw new StatsError('too_few', 'A consensus needs at least two sets');
+  const scores = sets.reduce((sum, set) => sum + set.length * (set[0]?.length ?? 0), 0);
+  if (scores > MOST_SCORES) throw new StatsError('out_of_range', `A consensus is computed for at most ${MOST_SCORES} scores; there are ${scores}`);
   const tables = sets.map((set, i) => toMatrix(set, `Set ${i + 1}`));
   const n = tables[0].rows;
   const width = Math.max(...tables.map((table) => table.columns));
