@@ -57,6 +57,33 @@ async function tapLine(page: Page, n: number, share: number): Promise<void> {
   await page.mouse.click(box.x + box.width * share, box.y + box.height / 2);
 }
 
+const TAPS = 40;
+
+/** Milliseconds from finger to paint with the CPU slowed down 6 times, tap after tap on the page's lines. */
+async function tapsToPaint(page: Page): Promise<number[]> {
+  const client = await page.context().newCDPSession(page);
+  await client.send('Emulation.setCPUThrottlingRate', { rate: 6 });
+  await page.evaluate(() => {
+    const seen: number[] = [];
+    Object.assign(window, { seen });
+    new PerformanceObserver((list) => list.getEntries().forEach((entry) => entry.name === 'pointerup' && seen.push(entry.duration))).observe({ type: 'event', durationThreshold: 16, buffered: false } as PerformanceObserverInit);
+  });
+  const lines = await page.getByRole('slider').count();
+  for (let n = 0; n < TAPS; n += 1) {
+    const box = await boxOf(page, n % lines);
+    // A thumb taps after the page has come to rest: the scroll's own frames are not the tap's.
+    await page.waitForTimeout(250);
+    await page.touchscreen.tap(box.x + box.width * (0.1 + 0.02 * n), box.y + box.height / 2);
+    await page.waitForTimeout(350);
+  }
+  const durations = await page.evaluate(() => (window as unknown as { seen: number[] }).seen);
+  await client.detach();
+  // Event Timing tells those of 16 ms and more, rounded to 8; the rest were quicker.
+  return [...durations, ...Array<number>(Math.max(0, TAPS - durations.length)).fill(8)];
+}
+
+const told = (ms: readonly number[]) => `median ${quantile(ms, 0.5)} ms, p95 ${quantile(ms, 0.95)} ms, most ${Math.max(...ms)} ms`;
+
 describe('the sheet on a phone', () => {
   it('weighs little', { timeout: 300_000 }, async () => {
     const bare = await startServer({ cwd: buildBareApp() });
@@ -69,32 +96,23 @@ describe('the sheet on a phone', () => {
 
   it('paints soon after a tap, and soon after the address', { timeout: 300_000 }, async () => {
     const browser = await launch();
-    const context = await browser.newContext({ viewport: { width: 360, height: 740 }, isMobile: true, hasTouch: true, deviceScaleFactor: 2 });
+    const phone = { viewport: { width: 360, height: 740 }, isMobile: true, hasTouch: true, deviceScaleFactor: 2 };
+    const context = await browser.newContext(phone);
     await context.addCookies(asCookies(scene.cookies[1]!, server.url));
     const page = await context.newPage();
-    const client = await context.newCDPSession(page);
     await page.goto(sheetUrl(server.url), { waitUntil: 'networkidle' });
     expect(await page.getByRole('slider').count()).toBe(40);
-    await client.send('Emulation.setCPUThrottlingRate', { rate: 6 });
-    await page.evaluate(() => {
-      const seen: number[] = [];
-      Object.assign(window, { seen });
-      new PerformanceObserver((list) => list.getEntries().forEach((entry) => entry.name === 'pointerup' && seen.push(entry.duration))).observe({ type: 'event', durationThreshold: 16, buffered: false } as PerformanceObserverInit);
-    });
-    const taps = 40;
-    for (let n = 0; n < taps; n += 1) {
-      const box = await boxOf(page, n);
-      await page.touchscreen.tap(box.x + box.width * (0.1 + 0.02 * n), box.y + box.height / 2);
-      await page.waitForTimeout(350);
-    }
-    const durations = await page.evaluate(() => (window as unknown as { seen: number[] }).seen);
-    // Event Timing tells those of 16 ms and more, rounded to 8; the rest were quicker.
-    const all = [...durations, ...Array<number>(Math.max(0, taps - durations.length)).fill(8)];
-    say(`tap to paint, 40 lines, CPU slowed 6 times, ${taps} taps: median ${quantile(all, 0.5)} ms, p95 ${quantile(all, 0.95)} ms, most ${Math.max(...all)} ms (goal 50)`);
+    const sheet = await tapsToPaint(page);
+    say(`tap to paint, 40 lines, CPU slowed 6 times, ${TAPS} taps: ${told(sheet)} (goal 50)`);
+    // What this machine takes for a page of one box that moves when it is touched, without any framework.
+    await page.goto(`${server.url}/api/health`);
+    await page.setContent('<div role="slider" style="height:600px;background:#eee"><div style="width:9px;height:9px;background:#000"></div></div>');
+    await page.getByRole('slider').evaluate((box) => box.addEventListener('pointerup', (event: Event) => ((box.firstElementChild as HTMLElement).style.transform = `translateX(${(event as PointerEvent).clientX}px)`)));
+    say(`tap to paint of a page with one box and no script but its own: ${told(await tapsToPaint(page))}`);
 
     const paints: number[] = [];
     for (let round = 0; round < 5; round += 1) {
-      const fresh = await browser.newContext({ viewport: { width: 360, height: 740 }, isMobile: true, hasTouch: true, deviceScaleFactor: 2 });
+      const fresh = await browser.newContext(phone);
       await fresh.addCookies(asCookies(scene.cookies[2 + round]!, server.url));
       const cold = await fresh.newPage();
       const throttle = await fresh.newCDPSession(cold);
@@ -108,7 +126,7 @@ describe('the sheet on a phone', () => {
     }
     say(`largest contentful paint, cold, 1.6 Mbit/s, 150 ms, CPU slowed 4 times: median ${Math.round(quantile(paints, 0.5))} ms of ${paints.map(Math.round).join(', ')} (goal 1500)`);
     await browser.close();
-    expect(quantile(all, 0.5)).toBeLessThan(200);
+    expect(quantile(sheet, 0.5)).toBeLessThan(200);
   });
 
   it(`keeps every tap that it says is kept, through ${KILLS} kills of the browser`, { timeout: 1_800_000 }, async () => {
