@@ -17,7 +17,10 @@ export type Grain = (typeof GRAINS)[number];
 export const DRAW_METHODS = ['thief', 'nail', 'spigot'] as const;
 export type DrawMethod = (typeof DRAW_METHODS)[number];
 
-export const METHODS = ['profile', 'triangle'] as const;
+export const METHODS = [
+  'profile', 'category_profile', 'check_all', 'rate_all', 'just_right', 'liking', 'free_note', 'ranking',
+  'triangle', 'tetrad', 'duo_trio', 'duo_trio_constant', 'directional_pair', 'preference', 'two_of_five',
+] as const;
 export type Method = (typeof METHODS)[number];
 
 export const SESSION_STATES = ['draft', 'sealed', 'open', 'closed', 'unsealed', 'abandoned'] as const;
@@ -38,8 +41,16 @@ export type SeatRole = (typeof SEAT_ROLES)[number];
 export const CALLS = ['bottle', 'hold', 'rack', 'top', 'treat', 'blend', 'declassify'] as const;
 export type CallKind = (typeof CALLS)[number];
 
+/**
+ * How a line of the ballot is answered: `line` 0 to 100; `category` 0 to 5 in words; `check` 0 or 1; `rate` 0
+ * (not there) to 3; `just_right` 1 (far too little) to 5; `liking` 1 to 9; `term` a descriptor that a free note may
+ * name, 0 to 3; `ask` not scored: what a pair or an order is about; `flag` a fault, ticked.
+ */
+export const ITEM_KINDS = ['line', 'category', 'check', 'rate', 'just_right', 'liking', 'term', 'ask', 'flag'] as const;
+export type ItemKind = (typeof ITEM_KINDS)[number];
+
 /** What one operation sent by a phone may record. */
-export const OPERATION_KINDS = ['score', 'clear', 'choice', 'comment', 'fault', 'submit'] as const;
+export const OPERATION_KINDS = ['score', 'clear', 'choice', 'order', 'comment', 'fault', 'submit'] as const;
 export type OperationKind = (typeof OPERATION_KINDS)[number];
 
 /** `counted` before close; `late` after it: kept and shown, never counted. */

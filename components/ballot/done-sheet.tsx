@@ -38,7 +38,7 @@ export function DoneSheet({ sheet, store, state, place, go }: Props) {
           <p className="hash"><Hash hex={sheet.commitment} /></p>
           <p><a href={`/check/${sheet.commitment}`}>{t('done.check')}</a></p>
         </div>
-        {sheet.method === 'profile' && state.sessionState === 'open' && <button type="button" className="btn" onClick={() => go(firstPlace(sheet))}>{t('done.change')}</button>}
+        {sheet.ballot.kind !== 'pick' && state.sessionState === 'open' && <button type="button" className="btn" onClick={() => go(firstPlace(sheet))}>{t('done.change')}</button>}
       </div>
     </>
   );

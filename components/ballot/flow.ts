@@ -1,11 +1,16 @@
 import { PHASES, type Phase } from '@/db/enums';
-import type { Sheet, SheetItem } from '@/lib/ballots/types';
-import { scoreKey, type Answer } from '@/lib/offline/answers';
+import { OWED_KINDS, type Sheet, type SheetItem } from '@/lib/ballots/types';
+import { choiceKey, orderKey, scoreKey, type Answer } from '@/lib/offline/answers';
 import type { Place } from '@/lib/offline/types';
 
 /** The lines that this seat scores: a nose-only taster gets look and nose. */
-export const linesOf = (sheet: Sheet): SheetItem[] =>
-  sheet.seatRole === 'nose_only' ? sheet.items.filter((item) => item.phase === 'look' || item.phase === 'nose') : sheet.items;
+export function linesOf(sheet: Sheet): SheetItem[] {
+  const forNose = sheet.items.filter((item) => item.phase === 'look' || item.phase === 'nose');
+  return sheet.seatRole === 'nose_only' && forNose.length > 0 ? forNose : sheet.items;
+}
+
+/** Whether the sheet goes from glass to glass, not from set to set. */
+export const isByGlass = ({ ballot }: Sheet): boolean => ballot.kind === 'glasses' || ballot.kind === 'note';
 
 /** The parts of one glass in the order in which it is tasted. */
 export function phasesOf(sheet: Sheet): Phase[] {
@@ -14,7 +19,7 @@ export function phasesOf(sheet: Sheet): Phase[] {
 }
 
 export const firstPlace = (sheet: Sheet): Place => ({
-  view: 'glass', block: sheet.blocks[0]!.block, position: 1, phase: sheet.method === 'profile' ? phasesOf(sheet)[0]! : null, restUntil: null,
+  view: 'glass', block: sheet.blocks[0]!.block, position: 1, phase: sheet.ballot.kind === 'glasses' ? phasesOf(sheet)[0]! : null, restUntil: null,
 });
 
 /** The glass after this one: in the block, then in the next; null after the last. */
@@ -25,7 +30,7 @@ export function nextGlass(sheet: Sheet, place: Place): { block: number; position
   return next ? { block: next.block, position: 1 } : null;
 }
 
-/** The first glass of the block after this one (triangle: the next set); null after the last. */
+/** The block after this one (the next set); null after the last. */
 export function nextBlock(sheet: Sheet, block: number): number | null {
   const index = sheet.blocks.findIndex((candidate) => candidate.block === block);
   return sheet.blocks[index + 1]?.block ?? null;
@@ -50,10 +55,10 @@ export interface Gap {
   missing: number;
 }
 
-/** Where lines are still untouched, glass by glass and part by part. */
+/** Where lines that are owed an answer are still untouched, glass by glass and part by part. */
 export function gapsOf(sheet: Sheet, answers: ReadonlyMap<string, Answer>): Gap[] {
   const gaps: Gap[] = [];
-  const lines = linesOf(sheet).filter((item) => item.kind === 'line');
+  const lines = linesOf(sheet).filter((item) => OWED_KINDS.includes(item.kind));
   for (const { block, glasses } of sheet.blocks) {
     for (const { position, code } of glasses) {
       for (const phase of phasesOf(sheet)) {
@@ -63,4 +68,13 @@ export function gapsOf(sheet: Sheet, answers: ReadonlyMap<string, Answer>): Gap[
     }
   }
   return gaps;
+}
+
+/** Sets that are not answered yet: not locked, or not wholly ordered. */
+export function openSets(sheet: Sheet, answers: ReadonlyMap<string, Answer>): number[] {
+  return sheet.blocks.filter(({ block, glasses }) => {
+    if (sheet.ballot.kind === 'pick') return !answers.has(choiceKey(block));
+    const op = answers.get(orderKey(block))?.op;
+    return sheet.ballot.kind === 'order' && !(op?.kind === 'order' && op.order.length === glasses.length);
+  }).map(({ block }) => block);
 }

@@ -1,7 +1,7 @@
 'use client';
 
 import { useWords } from '@/components/i18n/words';
-import type { SheetItem } from '@/lib/ballots/types';
+import { OWED_KINDS, type SheetItem } from '@/lib/ballots/types';
 import { commentKey, faultKey, scoreKey } from '@/lib/offline/answers';
 import type { SheetState } from '@/lib/offline/store';
 import { CommentBox } from './comment-box';
@@ -10,9 +10,12 @@ import { afterRest, codeAt, linesOf, nextGlass, phasesOf, sealShort } from './fl
 import { GlassLabel } from './glass-label';
 import { KeptLine, Trouble } from './kept-line';
 import { LineScale } from './line-scale';
+import { PointScale, type PointKind } from './point-scale';
 import type { SheetPart } from './sheet-part';
 import { useLineDraft } from './use-line-draft';
 import { phaseWord } from './words';
+
+const POINT_KINDS: Record<Exclude<PointKind, 'term'>, true> = { category: true, rate: true, just_right: true, liking: true };
 
 /** One part of one glass: the code, its lines, the way on. */
 export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
@@ -22,7 +25,10 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
   const phases = phasesOf(sheet);
   const part = phases.indexOf(phase);
   const items = linesOf(sheet).filter((item) => item.phase === phase);
+  const owed = items.filter((item) => OWED_KINDS.includes(item.kind));
   const lines = items.filter((item) => item.kind === 'line');
+  const checks = items.filter((item) => item.kind === 'check');
+  const points = items.filter((item): item is SheetItem & { kind: PointKind } => item.kind in POINT_KINDS);
   const flags = items.filter((item) => item.kind === 'flag');
   const isClosed = state.sessionState !== 'open';
   const { draft, touched, before, acts } = useLineDraft(store, block, position);
@@ -33,7 +39,8 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
     return op?.kind === 'score' ? op.value : null;
   };
 
-  const untouched = lines.filter((line) => valueOf(line) === null).length;
+  const setPoint = (item: SheetItem, value: number) => void store.record({ kind: 'score', block, position, item: item.item, value });
+  const untouched = owed.filter((line) => valueOf(line) === null).length;
   const glasses = sheet.blocks.find((candidate) => candidate.block === block)!.glasses;
   const active = lines.find((line) => line.item === touched);
   const activeValue = active ? valueOf(active) : null;
@@ -63,12 +70,28 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
         <h1>{phaseWord(t, phase)}</h1>
         <span className="soft">{t('sheet.partOf', { n: part + 1, total: phases.length })}{untouched > 0 && `, ${t('sheet.linesLeft', { n: untouched })}`}</span>
       </div>
-      <Trouble state={state} store={store} joinKey={sheet.joinKey} place={place} go={go} />
       {lines.map((line) => (
         <LineScale
           key={`${block}/${position}/${line.item}`} line={line} value={valueOf(line)} isActive={touched === line.item} isClosed={isClosed}
           kept={draft?.item === line.item ? 'saving' : (state.answers.get(scoreKey(block, position, line.item))?.state ?? null)}
           onSet={acts.set} onClear={acts.clear} onTouch={acts.touch}
+        />
+      ))}
+      {checks.length > 0 && (
+        <fieldset className="item field">
+          <legend className="legend">{t('points.ticks')}</legend>
+          {checks.map((item) => (
+            <label key={item.item} className="tick-row">
+              <input type="checkbox" checked={valueOf(item) === 1} disabled={isClosed} onChange={(event) => setPoint(item, event.target.checked ? 1 : 0)} />
+              <span>{item.name} <span className="hint">{item.definition}</span></span>
+            </label>
+          ))}
+        </fieldset>
+      )}
+      {points.map((item) => (
+        <PointScale
+          key={`${block}/${position}/${item.item}`} line={item} value={valueOf(item)} isClosed={isClosed} kept={state.answers.get(scoreKey(block, position, item.item))?.state ?? null}
+          onSet={(value) => setPoint(item, value)} onClear={() => void store.record({ kind: 'clear', block, position, item: item.item })}
         />
       ))}
       {flags.length > 0 && (
@@ -94,6 +117,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
         />
       )}
       <footer className="foot-bar">
+        <Trouble state={state} store={store} joinKey={sheet.joinKey} place={place} go={go} />
         {active && (activeValue !== null || before?.item === active.item) && !isClosed && (
           <FineSteps
             name={active.name} value={activeValue ?? 50} onStep={(value) => acts.set(active.item, value)} onClear={() => acts.clear(active.item)}

@@ -2,8 +2,7 @@
 
 import { useWords } from '@/components/i18n/words';
 import { Code } from '@/components/ui/code';
-import { choiceKey } from '@/lib/offline/answers';
-import { gapsOf } from './flow';
+import { gapsOf, openSets } from './flow';
 import { Trouble } from './kept-line';
 import { phaseWord } from './words';
 import type { SheetPart } from './sheet-part';
@@ -11,8 +10,8 @@ import type { SheetPart } from './sheet-part';
 /** Before handing in: what is still untouched, each with the way back to it. */
 export function ReviewSheet({ sheet, store, state, place, go }: SheetPart) {
   const t = useWords();
-  const gaps = sheet.method === 'profile' ? gapsOf(sheet, state.answers) : [];
-  const openSets = sheet.method === 'triangle' ? sheet.blocks.filter(({ block }) => !state.answers.has(choiceKey(block))) : [];
+  const gaps = sheet.ballot.kind === 'glasses' ? gapsOf(sheet, state.answers) : [];
+  const open = openSets(sheet, state.answers);
   const isClosed = state.sessionState !== 'open';
   const missing = gaps.reduce((sum, gap) => sum + gap.missing, 0);
   const handIn = async () => {
@@ -39,11 +38,11 @@ export function ReviewSheet({ sheet, store, state, place, go }: SheetPart) {
             </ul>
           </>
         )}
-        {openSets.map(({ block }) => (
+        {open.map((block) => (
           <button key={block} type="button" className="btn wide" onClick={() => go({ view: 'glass', block, position: 1, phase: null, restUntil: null })}>{t('review.openSet', { n: block })}</button>
         ))}
-        {missing === 0 && openSets.length === 0 && <p>{t('review.complete')}</p>}
-        {sheet.method === 'profile' && <p className="soft">{t('review.change')}</p>}
+        {missing === 0 && open.length === 0 && <p>{t('review.complete')}</p>}
+        {sheet.ballot.kind !== 'pick' && <p className="soft">{t('review.change')}</p>}
       </div>
       <footer className="foot-bar">
         <button type="button" className="btn btn-main wide" disabled={isClosed} onClick={() => void handIn()}>{t('review.handIn')}</button>

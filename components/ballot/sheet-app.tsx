@@ -10,15 +10,18 @@ import type { Sheet } from '@/lib/ballots/types';
 import type { Wordlist } from '@/lib/i18n/words';
 import type { Place } from '@/lib/offline/types';
 import { DoneSheet } from './done-sheet';
-import { codeAt, firstPlace } from './flow';
+import { codeAt, firstPlace, isByGlass } from './flow';
 import { ProfileSheet } from './profile-sheet';
 import { RestScreen } from './rest-screen';
 import { ReviewSheet } from './review-sheet';
-import { TriangleSheet } from './triangle-sheet';
 import { useSheet } from './use-sheet';
 
 const loadHandover = () => import('@/components/handover/handover-sheet').then((module) => module.HandoverSheet);
 const HandoverSheet = dynamic(loadHandover, { ssr: false });
+// Drawn on the server, so that a sheet carries the scripts of its own kind of answer only.
+const PickSheet = dynamic(() => import('./pick-sheet').then((module) => module.PickSheet));
+const OrderSheet = dynamic(() => import('./order-sheet').then((module) => module.OrderSheet));
+const NoteSheet = dynamic(() => import('./note-sheet').then((module) => module.NoteSheet));
 
 /** The panelist's sheet in the panelist's language: a reload comes back to the same glass and part. */
 export function SheetApp({ sheet, list }: { sheet: Sheet; list: Wordlist }) {
@@ -49,7 +52,8 @@ function SheetScreen({ sheet }: { sheet: Sheet }) {
     top.current?.focus({ preventScroll: true });
   };
   const parts = { sheet, store, state, go, place };
-  const isProfile = sheet.method === 'profile';
+  const byGlass = isByGlass(sheet);
+  const { kind } = sheet.ballot;
   return (
     <div className="phone" lang={t.locale}>
       <header className="bar">
@@ -61,10 +65,13 @@ function SheetScreen({ sheet }: { sheet: Sheet }) {
         {place.view === 'rest' && (
           <RestScreen
             until={place.restUntil ?? 0} restS={sheet.restS} onNext={() => go({ ...place, view: 'glass', restUntil: null })}
-            next={{ kind: isProfile ? 'Glass' : 'Set', n: isProfile ? place.position : place.block, code: codeAt(sheet, place.block, place.position) }}
+            next={{ kind: byGlass ? 'Glass' : 'Set', n: byGlass ? place.position : place.block, code: codeAt(sheet, place.block, place.position) }}
           />
         )}
-        {place.view === 'glass' && (isProfile ? <ProfileSheet {...parts} key={`${place.block}/${place.position}/${place.phase}`} /> : <TriangleSheet {...parts} key={place.block} />)}
+        {place.view === 'glass' && kind === 'glasses' && <ProfileSheet {...parts} key={`${place.block}/${place.position}/${place.phase}`} />}
+        {place.view === 'glass' && kind === 'note' && <NoteSheet {...parts} key={`${place.block}/${place.position}`} />}
+        {place.view === 'glass' && kind === 'pick' && <PickSheet {...parts} key={place.block} />}
+        {place.view === 'glass' && kind === 'order' && <OrderSheet {...parts} key={place.block} />}
         {place.view === 'review' && <ReviewSheet {...parts} />}
         {place.view === 'done' && <DoneSheet {...parts} />}
         {place.view === 'handover' && <HandoverSheet sheet={sheet} store={store} state={state} onBack={() => go({ ...place, view: state.answers.has('submit') ? 'done' : 'glass' })} />}

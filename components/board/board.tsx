@@ -4,7 +4,8 @@ import useSWR from 'swr';
 import { Ring } from '@/components/ui/ring';
 import type { Method } from '@/db/enums';
 import type { Board as BoardData, BoardSeat } from '@/lib/board/types';
-import { UNIT_WORDS } from '@/lib/sessions/format';
+import { factsOf } from '@/lib/methods/facts';
+import { UNIT_WORDS } from '@/lib/methods/types';
 import { EraseName } from './erase-name';
 import { SeatLink } from './seat-link';
 
@@ -21,13 +22,14 @@ async function fetchBoard(url: string): Promise<BoardData> {
 const ago = (seconds: number | null): string => (seconds === null ? '' : seconds < 90 ? `${seconds} s` : `${Math.round(seconds / 60)} min`);
 
 function whereOf(seat: BoardSeat, method: Method, units: number): { text: string; waits: boolean } {
-  const [one, many] = UNIT_WORDS[method];
+  const { unit } = factsOf(method);
+  const { one, many } = UNIT_WORDS[unit];
   if (!seat.isClaimed) return { text: 'nobody has joined', waits: !seat.isReserve };
   if (seat.hasLeft) return { text: 'has left', waits: false };
   if (seat.isSubmitted) return { text: `handed in, ${seat.received} of ${units} ${many}`, waits: false };
   if (seat.silentS !== null && seat.silentS > SILENT_S) return { text: 'phone silent', waits: true };
   if (!seat.at) return { text: 'has joined', waits: false };
-  return { text: method === 'triangle' ? `${one} ${seat.at.block}` : `${one} ${seat.at.position}${seat.at.phase ? `, ${seat.at.phase}` : ''}`, waits: false };
+  return { text: unit === 'set' ? `${one} ${seat.at.block}` : `${one} ${seat.at.position}${seat.at.phase ? `, ${seat.at.phase}` : ''}`, waits: false };
 }
 
 interface Props {
@@ -43,7 +45,7 @@ export function Board({ url, method, initial, cellar, sessionId }: Props) {
   const { data, error } = useSWR(url, fetchBoard, { refreshInterval: (latest) => ((latest ?? initial).state === 'unsealed' ? 0 : EVERY_MS), fallbackData: initial, dedupingInterval: 500 });
   const board = data ?? initial;
   const isOpen = board.state === 'open';
-  const [, many] = UNIT_WORDS[method];
+  const { many } = UNIT_WORDS[factsOf(method).unit];
   const shown = board.seats.filter((seat) => seat.isClaimed || !seat.isReserve);
   const freeReserves = board.seats.length - shown.length;
   const received = shown.reduce((sum, seat) => sum + seat.received, 0);

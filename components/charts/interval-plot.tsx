@@ -1,4 +1,5 @@
 import { MarkerAt } from './marker';
+import type { ScaleView } from '@/lib/results/types';
 import type { SampleStyle } from './styles';
 
 export interface Interval {
@@ -12,23 +13,28 @@ const WIDTH = 216;
 const STEP = 10;
 const PAD = 6;
 
-/** The part of the line from 0 to 100 that a plot shows, in whole twenties. */
+/** The part of a scale that a plot shows, in whole steps. */
 export interface Range {
   from: number;
   to: number;
+  step: number;
 }
 
-/** The twenties that hold all the intervals; at least two of them. */
-export function rangeOf(intervals: readonly Interval[]): Range {
-  const ends = intervals.flatMap((i) => [i.low ?? i.mean, i.high ?? i.mean]);
-  if (ends.length === 0) return { from: 0, to: 100 };
-  const from = Math.max(0, 20 * Math.floor(Math.min(...ends) / 20));
-  const to = Math.min(100, 20 * Math.ceil(Math.max(...ends) / 20));
-  return to - from >= 40 ? { from, to } : { from: Math.min(from, 60), to: Math.min(from, 60) + 40 };
+/** Steps of the axis: twenties on a line of 100, ones or twos on a short scale. */
+export const stepOf = ({ low, high }: ScaleView): number => (high - low >= 50 ? 20 : high - low > 6 ? 2 : 1);
+
+/** The steps that hold all the intervals; at least two of them. A short scale is shown whole. */
+export function rangeOf(intervals: readonly Interval[], ends: ScaleView): Range {
+  const step = stepOf(ends);
+  const values = intervals.flatMap((i) => [i.low ?? i.mean, i.high ?? i.mean]);
+  if (values.length === 0 || step < 20) return { from: ends.low, to: ends.high, step };
+  const from = Math.max(ends.low, step * Math.floor(Math.min(...values) / step));
+  const to = Math.min(ends.high, step * Math.ceil(Math.max(...values) / step));
+  return to - from >= 2 * step ? { from, to, step } : { from: Math.min(from, ends.high - 2 * step), to: Math.min(from, ends.high - 2 * step) + 2 * step, step };
 }
 
 const scale = ({ from, to }: Range) => (value: number) => PAD + ((WIDTH - 2 * PAD) * (Math.min(to, Math.max(from, value)) - from)) / (to - from);
-const ticksOf = ({ from, to }: Range) => Array.from({ length: (to - from) / 20 + 1 }, (_, i) => from + 20 * i);
+const ticksOf = ({ from, to, step }: Range) => Array.from({ length: Math.floor((to - from) / step) + 1 }, (_, i) => from + step * i);
 
 /** The figures of the scale, for the head of the column. */
 export function PlotAxis({ range }: { range: Range }) {

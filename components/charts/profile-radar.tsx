@@ -2,6 +2,7 @@
 
 import dynamic from 'next/dynamic';
 import { useState } from 'react';
+import type { ScaleView } from '@/lib/results/types';
 import { Marker } from './marker';
 import type { RadarSeries } from './radar-chart';
 
@@ -15,14 +16,14 @@ export interface LegendSeries extends RadarSeries {
 }
 
 /** The radar with its legend; with more than six samples the legend chooses which are drawn. `isWide`: legend beside. */
-export function ProfileRadar({ axes, series, isWide }: { axes: string[]; series: LegendSeries[]; isWide: boolean }) {
+export function ProfileRadar({ axes, series, isWide, scale }: { axes: string[]; series: LegendSeries[]; isWide: boolean; scale: ScaleView }) {
   const [drawn, setDrawn] = useState(() => series.slice(0, AT_ONCE).map((s) => s.sample));
   const mayChoose = series.length > AT_ONCE;
   const toggle = (sample: number) => setDrawn((now) => (now.includes(sample) ? now.filter((s) => s !== sample) : [...now, sample]));
   const name = (s: LegendSeries) => <><Marker style={s.style} /><b>{s.label}</b> <span className="soft">{s.note}</span></>;
   return (
     <figure className={isWide ? 'flex flex-wrap items-center gap-6' : 'stack tight'}>
-      <div style={{ height: `min(${isWide ? 400 : 320}px, 76vw)`, flex: '0 1 540px', width: '100%', minWidth: 0 }}><RadarChart axes={axes} series={series.filter((s) => drawn.includes(s.sample))} /></div>
+      <div style={{ height: `min(${isWide ? 400 : 320}px, 76vw)`, flex: '0 1 540px', width: '100%', minWidth: 0 }}><RadarChart axes={axes} series={series.filter((s) => drawn.includes(s.sample))} scale={scale} /></div>
       <figcaption>
         {mayChoose && <p className="note">At most {AT_ONCE} at once: choose which.</p>}
         <ul className="stack tight" aria-label="Samples">

@@ -3,6 +3,8 @@
 import { Chart as ChartJs, Filler, LineElement, PointElement, RadialLinearScale, type ChartOptions, type PointStyle } from 'chart.js';
 import { useSyncExternalStore } from 'react';
 import { Radar } from 'react-chartjs-2';
+import type { ScaleView } from '@/lib/results/types';
+import { stepOf } from './interval-plot';
 import type { SampleStyle, Shape } from './styles';
 
 ChartJs.register(RadialLinearScale, PointElement, LineElement, Filler);
@@ -37,11 +39,14 @@ const inLines = (name: string): string | string[] => {
   return words.length < 3 ? name : [words.slice(0, 2).join(' '), words.slice(2).join(' ')];
 };
 
-/** Top of the scale: the twenty above the highest mean. */
-const topOf = (series: readonly RadarSeries[]) => Math.min(100, 20 * Math.ceil((Math.max(20, ...series.flatMap((s) => s.values.map((v) => v ?? 0))) + 1) / 20));
+/** Top of the scale: the step above the highest mean. */
+const topOf = (series: readonly RadarSeries[], ends: ScaleView) => {
+  const step = stepOf(ends);
+  return step < 20 ? ends.high : Math.min(ends.high, step * Math.ceil((Math.max(step, ...series.flatMap((s) => s.values.map((v) => v ?? 0))) + 1) / step));
+};
 
 /** Mean profiles on a radar. Drawn in the browser only; the table beside holds the same numbers. */
-export default function RadarChart({ axes, series }: { axes: string[]; series: RadarSeries[] }) {
+export default function RadarChart({ axes, series, scale }: { axes: string[]; series: RadarSeries[]; scale: ScaleView }) {
   const mode = useSyncExternalStore(subscribeMode, readMode, () => 'paper');
   const token = tokenReader();
   const font = { family: getComputedStyle(document.body).fontFamily, size: 13 };
@@ -52,12 +57,12 @@ export default function RadarChart({ axes, series }: { axes: string[]; series: R
     plugins: { legend: { display: false }, tooltip: { enabled: false } },
     scales: {
       r: {
-        min: 0,
-        max: topOf(series),
+        min: scale.low,
+        max: topOf(series, scale),
         grid: { color: token('--rule') },
         angleLines: { color: token('--rule') },
         pointLabels: { color: token('--ink'), font },
-        ticks: { stepSize: 20, color: token('--ink-2'), backdropColor: token('--ground'), font: { ...font, size: 12 } },
+        ticks: { stepSize: stepOf(scale), color: token('--ink-2'), backdropColor: token('--ground'), font: { ...font, size: 12 } },
       },
     },
   };

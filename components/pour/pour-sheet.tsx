@@ -11,11 +11,11 @@ export function PourSheet({ sheet }: { sheet: Sheet }) {
         <article key={block} className={`sheet ${index > 0 ? 'page-break' : ''}`}>
           <header>
             <div className="row" style={{ gap: 14 }}><Mark size={40} /><h1>Pour sheet</h1></div>
-            <div className="right"><b>{sheet.title}, {sheet.isTriangle ? 'set' : 'flight'} {block}</b><br />{sheet.serving}</div>
+            <div className="right"><b>{sheet.title}, {sheet.blockWord} {block}</b><br />{sheet.serving}</div>
           </header>
           <p style={{ padding: '10px 0 12px' }}><b>For {sheet.pourer}, pourer,</b> who does not taste in this session. Above the cut the samples are named: that part never enters the tasting room.</p>
-          <h2><b>1</b> {sheet.isTriangle ? 'Fill the glasses, bottle by bottle' : 'Mark the bottles'}</h2>
-          {sheet.isTriangle ? <TriangleBottles sheet={sheet} block={block} /> : <Bottles sheet={sheet} block={block} />}
+          <h2><b>1</b> {sheet.hasOwnCodes ? 'Fill the glasses, bottle by bottle' : 'Mark the bottles'}</h2>
+          {sheet.hasOwnCodes ? <OwnCodeBottles sheet={sheet} block={block} /> : <Bottles sheet={sheet} block={block} />}
           <div className="cut"><span>cut here; below, nothing is named</span></div>
           <h2><b>2</b> Set the glasses</h2>
           <table className="pour">
@@ -52,7 +52,7 @@ function Bottles({ sheet, block }: { sheet: Sheet; block: number }) {
 }
 
 /** Each glass has a code of its own: the list says which of them each bottle fills. */
-function TriangleBottles({ sheet, block }: { sheet: Sheet; block: number }) {
+function OwnCodeBottles({ sheet, block }: { sheet: Sheet; block: number }) {
   const inBlock = sheet.blocks.find((candidate) => candidate.block === block)!.rows.flatMap((row) => row.glasses);
   return (
     <div className="stack">

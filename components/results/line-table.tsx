@@ -2,13 +2,14 @@ import { IntervalPlot, PlotAxis, rangeOf, type Range } from '@/components/charts
 import { Marker } from '@/components/charts/marker';
 import type { SampleStyle } from '@/components/charts/styles';
 import { PHASE_WORDS, shortName, showP, showScore } from '@/lib/results/format';
-import type { LineView, SampleView } from '@/lib/results/types';
+import type { LineView, SampleView, ScaleView } from '@/lib/results/types';
 
 interface Props {
   lines: LineView[];
   samples: SampleView[];
   styles: Map<number, SampleStyle>;
   alpha: number;
+  scale: ScaleView;
 }
 
 function Row({ line, range, samples, styles, alpha }: { line: LineView; range: Range } & Omit<Props, 'lines'>) {
@@ -38,11 +39,11 @@ function Row({ line, range, samples, styles, alpha }: { line: LineView; range: R
 
 /** Means, letters, intervals and p of each line of the ballot. */
 export function LineTable(props: Props) {
-  const { lines, samples, styles } = props;
-  const range = rangeOf(lines.flatMap((line) => line.cells));
+  const { lines, samples, styles, scale } = props;
+  const range = rangeOf(lines.flatMap((line) => line.cells), scale);
   return (
     <div className="scroll-x" tabIndex={0} role="region" aria-label="Means by descriptor">
-      <p className="soft pb-2" id="means-are">Mean scores from 0 to 100. Samples that share a letter were not shown to differ.</p>
+      <p className="soft pb-2" id="means-are">Mean scores from {scale.low} to {scale.high}. Samples that share a letter were not shown to differ.</p>
       <table className="ledger folds" aria-describedby="means-are">
         <thead>
           <tr>

@@ -25,8 +25,8 @@ export function ProfileFound({ profile, samples, styles }: { profile: ProfileVie
   return (
     <div className="stack">
       <div className={isWide ? 'stack' : 'ev'}>
-        {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} />}
-        <LineTable lines={profile.lines} samples={samples} styles={styles} alpha={profile.alpha} />
+        {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} scale={profile.scale} />}
+        <LineTable lines={profile.lines} samples={samples} styles={styles} alpha={profile.alpha} scale={profile.scale} />
       </div>
       <Statistics profile={profile} samples={samples} />
     </div>

@@ -4,25 +4,30 @@ import { useState } from 'react';
 import type { FieldMetadata } from '@conform-to/react';
 import { TicksField } from '@/components/forms/fields';
 import { useChosen } from '@/components/forms/use-chosen';
+import type { ItemRule } from '@/lib/methods/types';
 import type { DesignChoices } from '@/lib/sessions/types';
 
 interface Props {
   lines: FieldMetadata<unknown>;
   flags: FieldMetadata<unknown>;
   choices: DesignChoices;
+  rule: ItemRule;
 }
 
 /** Descriptors of the cellar's lexicon, by family; an aroma can be asked for in the nose, on the palate, or both. */
-export function BallotPicker({ lines, flags, choices }: Props) {
+export function BallotPicker({ lines, flags, choices, rule }: Props) {
   const [filter, setFilter] = useState('');
   const { chosen, toggle } = useChosen(lines);
   const word = filter.trim().toLowerCase();
   return (
     <section className="stack">
       <h2>The ballot</h2>
-      <fieldset className="field" id={lines.id}>
-        <legend>Lines to score, none to very strong</legend>
-        <p className="note">Six to twelve are enough for a glass. {chosen.size} chosen.</p>
+      {rule.from === 'whole' && <p>Nothing to choose: people write, and the phone finds the words of the whole lexicon in it.</p>}
+      {rule.from === 'none' && <p>One question: the overall liking, on nine points.</p>}
+      {rule.from === 'chosen' && rule.asksLiking && <p className="soft">The overall liking is asked after these.</p>}
+      <fieldset className="field" id={lines.id} hidden={rule.from !== 'chosen'}>
+        <legend>{rule.label}</legend>
+        <p className="note">{rule.hint} {chosen.size} chosen{chosen.size > rule.max && `; the first ${rule.max === 1 ? 'one counts' : `${rule.max} count`}`}.</p>
         {lines.errors && <p className="error">{lines.errors.join(' ')}</p>}
         <input className="input" type="search" placeholder="Find a descriptor" aria-label="Find a descriptor" value={filter} onChange={(event) => setFilter(event.target.value)} />
         {choices.lexicon.map(({ family, entries }) => {
@@ -43,7 +48,7 @@ export function BallotPicker({ lines, flags, choices }: Props) {
           );
         })}
       </fieldset>
-      <TicksField field={flags} label="Faults to tick when noticed" options={choices.faults} />
+      {rule.hasFlags && <TicksField field={flags} label="Faults to tick when noticed" options={choices.faults} />}
     </section>
   );
 }

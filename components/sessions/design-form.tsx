@@ -12,11 +12,6 @@ import { BallotPicker } from './ballot-picker';
 import { Needs } from './needs';
 import { PullPicker } from './pull-picker';
 
-const METHODS = [
-  { value: 'profile', label: 'Profile: what do they taste like, and how much of it?' },
-  { value: 'triangle', label: 'Triangle: is there a difference at all?' },
-];
-
 interface Props {
   cellar: string;
   choices: DesignChoices;
@@ -28,7 +23,9 @@ interface Props {
 /** The whole design on one page, in the order in which a leader thinks of it. */
 export function DesignForm({ cellar, choices, defaults, sessionId, version }: Props) {
   const [method, setMethod] = useState(defaults.method as Method);
-  const isProfile = method === 'profile';
+  const facts = choices.methods.find((candidate) => candidate.method === method)!;
+  const { min, max } = facts.sampleCount;
+  const isSets = facts.unit === 'set';
   return (
     <ActionForm action={saveDraftAction} schema={draftSchema} defaults={defaults} submit="Save the draft" className="stack wide-gap">
       {(fields, form) => (
@@ -40,7 +37,7 @@ export function DesignForm({ cellar, choices, defaults, sessionId, version }: Pr
             <h2>The question</h2>
             <AreaField field={fields.privateQuestion!} label="What does the cellar want to know?" hint="Private: nobody who tastes gets it before the key is open." rows={2} />
             <div onChange={(event) => setMethod((event.target as unknown as HTMLSelectElement).value as Method)}>
-              <SelectField field={fields.method!} label="Method" options={METHODS} />
+              <SelectField field={fields.method!} label="Method" options={choices.methods.map((choice) => ({ value: choice.method, label: `${choice.name}: ${choice.answers.charAt(0).toLowerCase()}${choice.answers.slice(1)}` }))} />
             </div>
           </section>
           <section className="stack">
@@ -50,24 +47,24 @@ export function DesignForm({ cellar, choices, defaults, sessionId, version }: Pr
           </section>
           <section className="stack">
             <h2>The samples</h2>
-            <PullPicker field={fields.pulls!} label={isProfile ? 'Two to twelve pulls' : 'Two pulls'} pulls={choices.pulls} />
+            <PullPicker field={fields.pulls!} label={min === max ? 'Two pulls' : `${min === 1 ? 'One' : min === 2 ? 'Two' : 'Three'} to ${max} pulls`} pulls={choices.pulls} />
             {choices.pulls.length === 0 && <p className="caution">No pull is recorded yet. Open a barrel and record one; it then stands here.</p>}
             <TextField field={fields.controlLabel!} label="A control from outside the cellar" hint="Its label only, if there is one." />
           </section>
-          {isProfile && <BallotPicker lines={fields.lines!} flags={fields.flags!} choices={choices} />}
+          {facts.items && <BallotPicker lines={fields.lines!} flags={fields.flags!} choices={choices} rule={facts.items} />}
           <section className="stack">
             <h2>The serving</h2>
             <div className="grid-fields">
               <TextField field={fields.seatsPlanned!} label="Seats" type="number" inputMode="numeric" />
               <TextField field={fields.reservesPlanned!} label="Reserve seats" type="number" inputMode="numeric" hint="Sealed in the same plan." />
-              <TextField field={fields.replicates!} label={isProfile ? 'Times each is tasted' : 'Sets for each seat'} type="number" inputMode="numeric" hint={isProfile ? 'Two or three show repeatability.' : 'One is the standard’s.'} />
+              <TextField field={fields.replicates!} label={isSets ? 'Sets for each seat' : 'Times each is tasted'} type="number" inputMode="numeric" hint={isSets ? 'One is the standard’s.' : 'Two or three show repeatability.'} />
               <TextField field={fields.servingVolumeMl!} label="Serving, mL" type="number" inputMode="numeric" />
               <TextField field={fields.servingTemperatureC!} label="Temperature, °C" type="number" inputMode="decimal" step="0.1" hint="White 10–12, red 15–18 (common practice)." />
               <TextField field={fields.restS!} label="Rest between, s" type="number" inputMode="numeric" hint="60–90 for tannin (common practice)." />
               <TextField field={fields.alpha!} label="Risk of a false “different”, α" type="number" inputMode="decimal" step="any" hint="0.05 is usual." />
             </div>
             <TicksField field={fields.allergens!} label="Allergens in what is served" hint="Shown to everybody before they taste. Crackers and reference samples count." options={ALLERGENS.map((value) => ({ value, label: ALLERGEN_WORDS[value] }))} />
-            <Needs formId={form.id} pulls={choices.pulls} />
+            <Needs formId={form.id} pulls={choices.pulls} facts={facts} />
           </section>
           <section className="stack">
             <h2>The people</h2>

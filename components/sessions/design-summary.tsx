@@ -1,13 +1,14 @@
 import { ALLERGEN_WORDS } from '@/lib/seats/allergens';
-import { METHOD_WORDS } from '@/lib/sessions/format';
+import { factsOf } from '@/lib/methods/facts';
 import type { SessionView } from '@/lib/sessions/types';
 
 /** What was planned, as a list of facts. Samples stand by label, never in the plan's order. */
 export function DesignSummary({ session }: { session: SessionView }) {
   const { lines, flags, samples } = session;
+  const facts = factsOf(session.method);
   return (
     <dl className="facts">
-      <dt>Method</dt><dd>{METHOD_WORDS[session.method]}, {session.replicates} {session.method === 'triangle' ? (session.replicates === 1 ? 'set' : 'sets') : session.replicates === 1 ? 'time' : 'times'} for each seat</dd>
+      <dt>Method</dt><dd>{facts.name}, {session.replicates} {facts.unit === 'set' ? (session.replicates === 1 ? 'set' : 'sets') : session.replicates === 1 ? 'time' : 'times'} for each seat</dd>
       {samples.length > 0 && <><dt>Samples</dt><dd>{samples.map((sample) => sample.label + (sample.isControl ? ' (control)' : '')).join(', ')}</dd></>}
       {lines.length > 0 && <><dt>Lines</dt><dd>{lines.map((line) => `${line.name} (${line.phase})`).join(', ')}</dd></>}
       {flags.length > 0 && <><dt>Faults</dt><dd>{flags.join(', ')}</dd></>}

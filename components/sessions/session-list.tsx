@@ -2,7 +2,7 @@ import Link from 'next/link';
 import { Empty } from '@/components/ui/empty';
 import { Ring, type RingState } from '@/components/ui/ring';
 import type { SessionState } from '@/db/enums';
-import { METHOD_WORDS } from '@/lib/sessions/format';
+import { factsOf } from '@/lib/methods/facts';
 import type { SessionSort } from '@/lib/sessions/loaders';
 import type { SessionListItem } from '@/lib/sessions/types';
 
@@ -34,7 +34,7 @@ export function SessionList({ base, items, isFiltered, mayDesign, sort, hrefOf }
           <tr key={item.id}>
             <th scope="row"><Link href={`${base}/${item.id}`}>{item.title}</Link></th>
             <td data-label="State"><span className={`row ${item.state === 'open' ? 'live' : ''}`} style={{ display: 'inline-flex' }}><Ring state={RING[item.state]} size={12} />{item.state}</span></td>
-            <td data-label="Method">{METHOD_WORDS[item.method]}</td>
+            <td data-label="Method">{factsOf(item.method).name}</td>
             <td data-label="When" className="soft">{item.when}</td>
             <td data-label="Leader" className="soft">{item.leader}</td>
           </tr>

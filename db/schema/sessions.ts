@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { check, foreignKey, index, integer, primaryKey, real, sqliteTable, text, unique, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { METHODS, PHASES, SEAT_ROLES, SESSION_STATES, type Allergen } from '../enums';
+import { ITEM_KINDS, METHODS, PHASES, SEAT_ROLES, SESSION_STATES, type Allergen } from '../enums';
 import { pulls } from './cellar';
 import { id, moment, version } from './columns';
 import { cellars, users } from './identity';
@@ -116,7 +116,7 @@ export const ballotItems = sqliteTable(
     sessionId: text().notNull(),
     position: integer().notNull(),
     phase: text({ enum: PHASES }).notNull(),
-    kind: text({ enum: ['line', 'flag'] }).notNull(),
+    kind: text({ enum: ITEM_KINDS }).notNull(),
     descriptorId: text().notNull(),
     name: text().notNull(),
     definition: text().notNull(),

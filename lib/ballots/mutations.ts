@@ -1,14 +1,16 @@
 import 'server-only';
 import { getDb, type Tx } from '@/db/client';
-import type { Admission, SessionState } from '@/db/enums';
+import type { Admission, ItemKind, SessionState } from '@/db/enums';
 import { ballotItems, operations, seats, servings } from '@/db/schema';
 import { and, eq } from 'drizzle-orm';
 import { AppError } from '../errors';
+import { factsOf } from '../methods/facts';
 import { sha256Hex } from '../ids';
 import type { SeatAccess } from '../seats/access';
 import type { Operation, OperationBody, SyncRequest } from './schema';
 import { statements } from './statements';
-import type { SyncResponse } from './types';
+import { valuesOf } from './values';
+import { VALUE_RANGE, type Ballot, type SyncResponse } from './types';
 
 type Refusal = SyncResponse['refused'][number];
 type RefusalCode = Refusal['code'];
@@ -17,6 +19,7 @@ const REFUSAL_TEXT: Record<RefusalCode, string> = {
   body_changed: 'The same operation was sent before with another content.',
   no_such_glass: 'The plan of this seat has no such glass.',
   no_such_line: 'The ballot has no such line.',
+  no_such_value: 'The line has no such value.',
   set_locked: 'This set was locked before with another answer.',
   not_this_method: 'That kind of answer does not belong to this session.',
   wrong_state: 'The session is not open.',
@@ -31,22 +34,22 @@ function admissionIn(state: SessionState): Admission | null {
   return state === 'draft' || state === 'sealed' ? null : 'late';
 }
 
-interface Ballot {
+interface KnownBallot {
   glasses: ReadonlySet<string>;
-  kinds: ReadonlyMap<number, 'line' | 'flag'>;
+  kinds: ReadonlyMap<number, ItemKind>;
 }
 
 /** Sealing fixes servings and ballot for good, so what was read once stays true. Bounded: a server sees few seats at a time. */
-const knownBallots = new Map<string, Ballot>();
+const knownBallots = new Map<string, KnownBallot>();
 const KNOWN_LIMIT = 2_000;
 
 /** The places and lines that the seat's ballot has. */
-function ballotOf(tx: Tx, seatId: string, sessionId: string): Ballot {
+function ballotOf(tx: Tx, seatId: string, sessionId: string): KnownBallot {
   const known = knownBallots.get(seatId);
   if (known) return known;
   const glasses = tx.select({ block: servings.block, position: servings.position }).from(servings).where(eq(servings.seatId, seatId)).all();
   const lines = tx.select({ item: ballotItems.position, kind: ballotItems.kind }).from(ballotItems).where(eq(ballotItems.sessionId, sessionId)).all();
-  const ballot: Ballot = {
+  const ballot: KnownBallot = {
     glasses: new Set(glasses.map((glass) => `${glass.block}/${glass.position}`)),
     kinds: new Map(lines.map((line) => [line.item, line.kind])),
   };
@@ -55,27 +58,42 @@ function ballotOf(tx: Tx, seatId: string, sessionId: string): Ballot {
   return ballot;
 }
 
-/** The sets of a triangle that the seat has locked. */
+/** The sets in which the seat has locked its choice. */
 const lockedSetsOf = (tx: Tx, seatId: string): Set<number | null> =>
   new Set(tx.select({ block: operations.block }).from(operations).where(and(eq(operations.seatId, seatId), eq(operations.kind, 'choice'))).all().map((row) => row.block));
 
-function refusalOf(body: OperationBody, isTriangle: boolean, ballot: Ballot, lockedSets: ReadonlySet<number | null>): RefusalCode | null {
-  if (body.kind === 'submit') return null;
-  if (!ballot.glasses.has(`${body.block}/${body.position}`)) return 'no_such_glass';
-  if (body.kind === 'comment') return null;
-  if ((body.kind === 'choice') !== isTriangle) return 'not_this_method';
-  if (body.kind === 'choice') return lockedSets.has(body.block) ? 'set_locked' : null;
-  return ballot.kinds.get(body.item) === (body.kind === 'fault' ? 'flag' : 'line') ? null : 'no_such_line';
+/** Kinds of answers that a ballot takes, beside remarks and handing in. */
+const TAKES: Record<Ballot['kind'], readonly OperationBody['kind'][]> = { glasses: ['score', 'clear', 'fault'], note: ['score', 'clear'], pick: ['choice'], order: ['order'] };
+
+interface Asked {
+  ballot: Ballot;
+  known: KnownBallot;
+  lockedSets: ReadonlySet<number | null>;
 }
 
-const valueOf = (body: OperationBody) => ({
-  block: 'block' in body ? body.block : null,
-  position: 'position' in body ? body.position : null,
-  item: 'item' in body ? body.item : null,
-  valueNumber: body.kind === 'score' ? body.value : body.kind === 'fault' ? Number(body.isNoted) : null,
-  valueText: body.kind === 'comment' ? body.text : null,
-  isGuess: body.kind === 'choice' ? body.isGuess : null,
-});
+function refusalOf(body: OperationBody, { ballot, known, lockedSets }: Asked): RefusalCode | null {
+  if (body.kind === 'submit') return null;
+  const has = (position: number) => known.glasses.has(`${body.block}/${position}`);
+  if (body.kind === 'order') {
+    if (ballot.kind !== 'order') return 'not_this_method';
+    return body.order.every(has) && new Set(body.order).size === body.order.length ? null : 'no_such_glass';
+  }
+  if (!has(body.position)) return 'no_such_glass';
+  if (body.kind === 'comment') return null;
+  if (!TAKES[ballot.kind].includes(body.kind)) return 'not_this_method';
+  if (body.kind === 'choice') return choiceRefusal(body, ballot, has) ?? (lockedSets.has(body.block) ? 'set_locked' : null);
+  const kind = known.kinds.get(body.item);
+  if (body.kind === 'fault') return kind === 'flag' ? null : 'no_such_line';
+  const range = kind && VALUE_RANGE[kind];
+  if (!range) return 'no_such_line';
+  return body.kind === 'score' && (body.value < range.low || body.value > range.high) ? 'no_such_value' : null;
+}
+
+function choiceRefusal({ position, also }: Extract<OperationBody, { kind: 'choice' }>, ballot: Ballot, has: (position: number) => boolean): RefusalCode | null {
+  if (ballot.kind !== 'pick' || (also !== undefined) !== (ballot.picks === 2)) return 'not_this_method';
+  if (also !== undefined && (also <= position || !has(also))) return 'no_such_glass';
+  return ballot.hasReference && position === 1 ? 'no_such_glass' : null;
+}
 
 /**
  * Takes one delivery of a phone's outbox, whole or not at all. An operation that is known (same id,
@@ -103,10 +121,10 @@ function takeOperations(tx: Tx, { seat, session }: SeatAccess, ops: readonly Ope
   const receipts: SyncResponse['receipts'] = [];
   const refused: Refusal[] = [];
   const refuse = (opId: string, code: RefusalCode) => refused.push({ opId, code, message: REFUSAL_TEXT[code] });
-  const isTriangle = session.method === 'triangle';
+  const { ballot } = factsOf(session.method);
   const { knownOperation, keepOperation } = statements();
-  const ballot = ballotOf(tx, seat.id, session.id);
-  const lockedSets = isTriangle ? lockedSetsOf(tx, seat.id) : new Set<number | null>();
+  const known = ballotOf(tx, seat.id, session.id);
+  const lockedSets = ballot.kind === 'pick' ? lockedSetsOf(tx, seat.id) : new Set<number | null>();
   let isHandedIn = false;
   for (const op of ops) {
     const hash = bodyHash(op);
@@ -117,14 +135,14 @@ function takeOperations(tx: Tx, { seat, session }: SeatAccess, ops: readonly Ope
       else refuse(op.opId, 'body_changed');
       continue;
     }
-    const code = admission === null ? 'wrong_state' : refusalOf(op.body, isTriangle, ballot, lockedSets);
+    const code = admission === null ? 'wrong_state' : refusalOf(op.body, { ballot, known, lockedSets });
     if (code || admission === null) {
       refuse(op.opId, code ?? 'wrong_state');
       continue;
     }
     const { lastInsertRowid } = keepOperation.run({
       opId: op.opId, cellarId: seat.cellarId, sessionId: session.id, seatId: seat.id, tokenGeneration: seat.tokenGeneration,
-      deviceId: op.deviceId, seq: op.seq, kind: op.body.kind, ...valueOf(op.body), bodyHash: hash, clientAt: new Date(op.clientAt), receivedAt, admission,
+      deviceId: op.deviceId, seq: op.seq, kind: op.body.kind, ...valuesOf(op.body), bodyHash: hash, clientAt: new Date(op.clientAt), receivedAt, admission,
     });
     receipts.push({ opId: op.opId, receiptNo: Number(lastInsertRowid), admission });
     if (op.body.kind === 'choice') lockedSets.add(op.body.block);

@@ -7,18 +7,21 @@ const clientId = z.uuid({ version: 'v4' });
 
 /** Blocks (replicates, sets) and positions count from 1; a glass is named by the two, never by a row id. */
 const place = { block: z.int().min(1).max(12), position: z.int().min(1).max(40) };
-const item = z.int().min(1).max(80);
+const item = z.int().min(1).max(400);
+const position = place.position;
 
 /** What one operation says. `choice` is final; of the others the latest counts, and earlier ones are kept. */
 export const operationBodySchema = z.discriminatedUnion('kind', [
-  /** A line scale: 0 to 100 in steps of one. */
+  /** A line of the ballot in whole steps of its scale (see `VALUE_RANGE`). */
   z.strictObject({ kind: z.literal('score'), ...place, item, value: z.int().min(0).max(100) }),
   /** Takes a score back. */
   z.strictObject({ kind: z.literal('clear'), ...place, item }),
   /** A fault noted, or the note taken back. */
   z.strictObject({ kind: z.literal('fault'), ...place, item, isNoted: z.boolean() }),
-  /** Triangle: the glass that is different, in the set `block`. */
-  z.strictObject({ kind: z.literal('choice'), ...place, isGuess: z.boolean() }),
+  /** The glass that was picked in the set `block`; where two are picked, the later one is `also`. */
+  z.strictObject({ kind: z.literal('choice'), ...place, also: position.optional(), isGuess: z.boolean() }),
+  /** The places of the set's glasses from least to most; shorter while it is not yet whole. */
+  z.strictObject({ kind: z.literal('order'), block: place.block, order: z.array(position).max(40) }),
   z.strictObject({ kind: z.literal('comment'), ...place, text: z.string().max(COMMENT_MAX) }),
   /** The whole ballot is handed in. */
   z.strictObject({ kind: z.literal('submit') }),

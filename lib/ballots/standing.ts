@@ -16,7 +16,7 @@ export interface StandingFact {
 function placeOf(op: StandingFact): string {
   const kind = op.kind === 'clear' ? 'score' : op.kind;
   // A set has one choice, whichever glass it names.
-  const position = op.kind === 'choice' ? '' : op.position;
+  const position = op.kind === 'choice' || op.kind === 'order' ? '' : op.position;
   return `${op.seatId}/${kind}/${op.block}/${position}/${op.item ?? ''}`;
 }
 

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { METHODS, PHASES } from '@/db/enums';
+import { ITEM_KINDS, METHODS, PHASES } from '@/db/enums';
 
 const componentSchema = z.strictObject({ vessel: z.string(), lot: z.string(), pulledAt: z.string(), share: z.number() });
 
@@ -10,7 +10,7 @@ export const planFileSchema = z.strictObject({
   /** 256 random bits, hex: without them a guesser could try all keys against the commitment. */
   salt: z.string().regex(/^[0-9a-f]{64}$/),
   samples: z.array(z.strictObject({ sample: z.int(), label: z.string(), components: z.array(componentSchema) })),
-  ballot: z.array(z.strictObject({ item: z.int(), phase: z.enum(PHASES), kind: z.enum(['line', 'flag']), name: z.string() })),
+  ballot: z.array(z.strictObject({ item: z.int(), phase: z.enum(PHASES), kind: z.enum(ITEM_KINDS), name: z.string() })),
   servings: z.array(z.strictObject({ seat: z.int(), block: z.int(), position: z.int(), code: z.string(), sample: z.int() })),
 });
 

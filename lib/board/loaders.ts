@@ -1,9 +1,11 @@
 import 'server-only';
 import { getDb } from '@/db/client';
+import type { OperationKind } from '@/db/enums';
 import { operations, seatPeople, seats, servings } from '@/db/schema';
 import { and, asc, eq, inArray, sql } from 'drizzle-orm';
 import type { Access } from '../auth/access';
 import { requireCapability } from '../auth/access';
+import { factsOf } from '../methods/facts';
 import { findSession } from '../sessions/find';
 import { seatLabel } from '../seats/format';
 import type { Board } from './types';
@@ -16,7 +18,9 @@ export function readBoard(access: Access, sessionId: string): Board {
   requireCapability(access, 'session.run');
   const db = getDb();
   const session = findSession(db, access.cellar.id, sessionId);
-  const isTriangle = session.method === 'triangle';
+  const { ballot, unit: unitOf } = factsOf(session.method);
+  const isSets = unitOf === 'set';
+  const kinds: OperationKind[] = ballot.kind === 'pick' ? ['choice'] : ballot.kind === 'order' ? ['order'] : ballot.kind === 'note' ? ['score', 'comment'] : ['score', 'fault'];
   const rows = db
     .select({ seat: seats, name: seatPeople.displayName })
     .from(seats)
@@ -24,18 +28,18 @@ export function readBoard(access: Access, sessionId: string): Board {
     .where(eq(seats.sessionId, session.id))
     .orderBy(asc(seats.number))
     .all();
-  const unit = isTriangle ? sql<number>`count(distinct ${operations.block})` : sql<number>`count(distinct ${operations.block} * 100 + ${operations.position})`;
+  const unit = isSets ? sql<number>`count(distinct ${operations.block})` : sql<number>`count(distinct ${operations.block} * 100 + ${operations.position})`;
   const received = new Map(
     db
       .select({ seatId: operations.seatId, units: unit })
       .from(operations)
-      .where(and(eq(operations.sessionId, session.id), eq(operations.admission, 'counted'), inArray(operations.kind, isTriangle ? ['choice'] : ['score', 'fault'])))
+      .where(and(eq(operations.sessionId, session.id), eq(operations.admission, 'counted'), inArray(operations.kind, kinds)))
       .groupBy(operations.seatId)
       .all()
       .map((row) => [row.seatId, row.units]),
   );
   const unitsPerSeat = rows.length === 0 ? 0 : db
-    .select({ n: isTriangle ? sql<number>`count(distinct ${servings.block})` : sql<number>`count(*)` })
+    .select({ n: isSets ? sql<number>`count(distinct ${servings.block})` : sql<number>`count(*)` })
     .from(servings)
     .where(eq(servings.seatId, rows[0]!.seat.id))
     .get()!.n;

@@ -5,6 +5,7 @@ import { and, asc, eq, lte } from 'drizzle-orm';
 import { takeOut } from '../blind/vault';
 import { newId, sha256Hex } from '../ids';
 import type { OperationBody } from '../ballots/schema';
+import { valuesOf } from '../ballots/values';
 import { scoreOf, simulatePanel, type Chance } from './panel';
 import { PANEL } from './people';
 
@@ -17,14 +18,9 @@ function claim(db: Db, seat: SeatRow, name: string, userId: string | null, at: D
 
 /** Says something for a seat of the demo, in the shape in which a phone would have sent it. */
 function say(db: Db, seat: SeatRow, seq: number, deviceId: string, body: OperationBody, at: Date): void {
-  const place = 'block' in body ? { block: body.block, position: body.position } : { block: null, position: null };
   db.insert(operations).values({
     opId: newId(), cellarId: seat.cellarId, sessionId: seat.sessionId, seatId: seat.id, tokenGeneration: 1, deviceId, seq, kind: body.kind,
-    ...place,
-    item: 'item' in body ? body.item : null,
-    valueNumber: body.kind === 'score' ? body.value : body.kind === 'fault' ? Number(body.isNoted) : null,
-    valueText: body.kind === 'comment' ? body.text : null,
-    isGuess: body.kind === 'choice' ? body.isGuess : null,
+    ...valuesOf(body),
     bodyHash: sha256Hex(JSON.stringify(body)), clientAt: at, receivedAt: at, admission: 'counted',
   }).run();
 }

@@ -37,3 +37,6 @@ export function translateLine<T extends LineWords>(line: T, key: string | null, 
     highAnchor: translation.anchors[line.highAnchor] ?? line.highAnchor,
   };
 }
+
+/** Other words for a built-in entry, in English and only there: the translations have none. */
+export const synonymsOf = (key: string | null, locale: Locale): readonly string[] => (locale === 'en' && key !== null ? (ENGLISH.get(key)?.synonyms ?? []) : []);

@@ -14,6 +14,7 @@ export interface Answer {
 export const scoreKey = (block: number, position: number, item: number) => `${block}/${position}/line/${item}`;
 export const faultKey = (block: number, position: number, item: number) => `${block}/${position}/fault/${item}`;
 export const commentKey = (block: number, position: number) => `${block}/${position}/comment`;
+export const orderKey = (block: number) => `${block}/order`;
 export const choiceKey = (block: number) => `${block}/choice`;
 
 function keyOf(body: Operation['body']): string {
@@ -27,6 +28,8 @@ function keyOf(body: Operation['body']): string {
       return commentKey(body.block, body.position);
     case 'choice':
       return choiceKey(body.block);
+    case 'order':
+      return orderKey(body.block);
     case 'submit':
       return 'submit';
   }
@@ -45,6 +48,7 @@ function fromServer(answers: SheetAnswers): Map<string, Answer> {
   for (const score of answers.scores) add({ kind: 'score', ...score });
   for (const fault of answers.faults) add({ kind: 'fault', ...fault, isNoted: true });
   for (const choice of answers.choices) add({ kind: 'choice', ...choice });
+  for (const order of answers.orders) add({ kind: 'order', ...order });
   for (const comment of answers.comments) add({ kind: 'comment', ...comment });
   return known;
 }

@@ -3,6 +3,8 @@ import { getDb } from '@/db/client';
 import { loadAccess, type Access } from '../auth/access';
 import { readKeyForPouring, type PouringKey } from '../blind/read-key';
 import { asAppError } from '../errors';
+import { factsOf } from '../methods/facts';
+import { UNIT_WORDS } from '../methods/types';
 import { seatLabel } from '../seats/format';
 import { findSession } from '../sessions/find';
 import { showMoment } from '../time';
@@ -14,23 +16,25 @@ export interface PourSheet {
   serving: string;
   printedAt: string;
   commitment: string;
-  isTriangle: boolean;
-  /** One to a bottle (profile: a code for each sample and block) or to a sample (triangle: all its glasses). */
+  /** Every glass has a code of its own, so that no bottle can carry one. */
+  hasOwnCodes: boolean;
+  blockWord: string;
+  /** One to a bottle (a code for each sample and block), or to a sample with all its glasses. */
   bottles: { block: number; code: string | null; label: string; glasses: number; volumeMl: number; codes: string[] }[];
   blocks: { block: number; rows: { seat: string; glasses: { code: string; label: string }[] }[] }[];
 }
 
-function bottlesOf(key: PouringKey, isTriangle: boolean, servingMl: number): PourSheet['bottles'] {
+function bottlesOf(key: PouringKey, hasOwnCodes: boolean, servingMl: number): PourSheet['bottles'] {
   const label = new Map(key.samples.map((sample) => [sample.sample, sample.label]));
   const groups = new Map<string, PouringKey['servings']>();
   for (const serving of key.servings) {
-    const name = isTriangle ? `${serving.sample}` : `${serving.block}/${serving.code}`;
+    const name = hasOwnCodes ? `${serving.sample}` : `${serving.block}/${serving.code}`;
     groups.set(name, [...(groups.get(name) ?? []), serving]);
   }
   return [...groups.values()]
     .map((servings) => ({
-      block: isTriangle ? 0 : servings[0]!.block,
-      code: isTriangle ? null : servings[0]!.code,
+      block: hasOwnCodes ? 0 : servings[0]!.block,
+      code: hasOwnCodes ? null : servings[0]!.code,
       label: label.get(servings[0]!.sample)!,
       glasses: servings.length,
       volumeMl: (servings.length + 1) * servingMl,
@@ -54,7 +58,8 @@ export async function loadPourSheet(slug: string, sessionId: string): Promise<{ 
     if (known?.code !== 'forbidden') throw error;
     return { access, sheet: null, refusal: known.message, title: session.title };
   }
-  const isTriangle = key.method === 'triangle';
+  const facts = factsOf(key.method);
+  const hasOwnCodes = facts.glassesPerBlock !== null;
   const label = new Map(key.samples.map((sample) => [sample.sample, sample.label]));
   const seats = [...new Set(key.servings.map((serving) => serving.seat))].sort((a, b) => a - b);
   const blocks = [...new Set(key.servings.map((serving) => serving.block))].sort((a, b) => a - b);
@@ -68,8 +73,9 @@ export async function loadPourSheet(slug: string, sessionId: string): Promise<{ 
       serving: [session.servingTemperatureC === null ? null : `${session.servingTemperatureC} °C`, `${session.servingVolumeMl} mL`, 'covered'].filter(Boolean).join(', '),
       printedAt: showMoment(now(), access.cellar.timeZone),
       commitment: key.commitment,
-      isTriangle,
-      bottles: bottlesOf(key, isTriangle, session.servingVolumeMl),
+      hasOwnCodes,
+      blockWord: UNIT_WORDS[hasOwnCodes ? 'set' : 'glass'].block.toLowerCase(),
+      bottles: bottlesOf(key, hasOwnCodes, session.servingVolumeMl),
       blocks: blocks.map((block) => ({
         block,
         rows: seats.map((seat) => ({

@@ -14,6 +14,7 @@ export interface CountedAnswers {
   scores: OperationFact[];
   faults: OperationFact[];
   choices: OperationFact[];
+  orders: OperationFact[];
   comments: OperationFact[];
   replaced: number;
   cleared: number;
@@ -30,12 +31,13 @@ export function countAnswers(operations: readonly OperationFact[]): CountedAnswe
     else counted.push(op);
   }
   const { standing, replaced } = standingOperations(counted);
-  const answers: CountedAnswers = { scores: [], faults: [], choices: [], comments: [], replaced, cleared: 0, late };
+  const answers: CountedAnswers = { scores: [], faults: [], choices: [], orders: [], comments: [], replaced, cleared: 0, late };
   for (const op of standing) {
     if (op.kind === 'score' && op.number !== null) answers.scores.push(op);
     else if (op.kind === 'clear') answers.cleared += 1;
     else if (op.kind === 'fault' && op.number === 1) answers.faults.push(op);
     else if (op.kind === 'choice') answers.choices.push(op);
+    else if (op.kind === 'order' && op.text !== null) answers.orders.push(op);
     else if (op.kind === 'comment' && op.text?.trim()) answers.comments.push(op);
   }
   return answers;
@@ -120,27 +122,27 @@ export function completeScores(rows: readonly LongScore[], products: number, rep
   return split;
 }
 
-/** One set of a triangle test as answered; null when the seat did not answer it. */
-export interface TriangleAnswer {
-  seat: number;
+/** One set as answered: its glasses in their order, and the places that were picked (none: not answered). */
+export interface SetAnswer {
+  seat: SeatFact;
   set: number;
-  isCorrect: boolean | null;
+  glasses: GlassFact[];
+  picked: GlassFact[];
   isGuess: boolean;
 }
 
-/** Whether each chosen glass was the odd one: the only glass of its sample in the set. */
-export function triangleAnswers(choices: readonly OperationFact[], glasses: readonly GlassFact[], seats: readonly SeatFact[]): TriangleAnswer[] {
+/** Every set of every seat that was taken, answered or not. */
+export function setAnswers(choices: readonly OperationFact[], glasses: readonly GlassFact[], seats: readonly SeatFact[]): SetAnswer[] {
   const chosen = new Map(choices.map((op) => [`${op.seatId}/${op.block}`, op]));
-  const answers: TriangleAnswer[] = [];
-  for (const seat of seats.filter((s) => s.isClaimed)) {
+  return seats.filter((seat) => seat.isClaimed).flatMap((seat) => {
     const own = glasses.filter((glass) => glass.seatId === seat.id);
-    for (const set of [...new Set(own.map((glass) => glass.block))].sort((a, b) => a - b)) {
-      const glassesOfSet = own.filter((glass) => glass.block === set);
+    const sets = [...new Set(own.map((glass) => glass.block))].sort((a, b) => a - b);
+    return sets.map((set) => {
+      const inSet = own.filter((glass) => glass.block === set).sort((a, b) => a.position - b.position);
       const choice = chosen.get(`${seat.id}/${set}`);
-      const picked = choice && glassesOfSet.find((glass) => glass.position === choice.position);
-      const isCorrect = picked ? glassesOfSet.filter((glass) => glass.sample === picked.sample).length === 1 : null;
-      answers.push({ seat: seat.number, set, isCorrect, isGuess: choice?.isGuess ?? false });
-    }
-  }
-  return answers;
+      // Of two picked glasses the second stands in the number (see `valueOf` of a delivery).
+      const places = choice ? [choice.position, choice.number] : [];
+      return { seat, set, glasses: inSet, picked: inSet.filter((glass) => places.includes(glass.position)), isGuess: choice?.isGuess ?? false };
+    });
+  });
 }

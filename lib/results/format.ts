@@ -1,4 +1,4 @@
-import type { DrawMethod, Method, Phase } from '@/db/enums';
+import type { DrawMethod, Phase } from '@/db/enums';
 import { TOAST_WORDS, VESSEL_WORDS } from '../register/format';
 import type { ComponentView, SampleView } from './types';
 
@@ -18,10 +18,8 @@ export function listWords(words: readonly (string | number)[], last = 'and'): st
   return `${words.slice(0, -1).join(', ')} ${last} ${words[words.length - 1]}`;
 }
 
-/** "1 panelist", "3 panelists". */
-export const count = (n: number, word: string): string => `${n} ${word}${n === 1 ? '' : 's'}`;
-
-export const METHOD_WORDS: Record<Method, string> = { profile: 'Profile on line scales (in the manner of ISO 13299)', triangle: 'Triangle test (in the manner of ISO 4120)' };
+/** "1 panelist", "3 panelists"; "2 people". */
+export const count = (n: number, word: string, many = `${word}s`): string => `${n} ${n === 1 ? word : many}`;
 
 export const PHASE_WORDS: Record<Phase, string> = { look: 'look', nose: 'nose', palate: 'palate', mouthfeel: 'mouthfeel', after: 'after' };
 

@@ -6,17 +6,16 @@ import type { Access } from '../auth/access';
 import { allows } from '../auth/permissions';
 import { AppError, asAppError } from '../errors';
 import { methodOf } from '../methods';
+import { UNIT_WORDS } from '../methods/types';
 import { findSession, type SessionRow } from '../sessions/find';
 import { showMoment } from '../time';
 import { listEarlyOpenings, listGlasses, listItems, listOperations, listSamples, listSeats, readFrame } from './data';
-import { countAnswers, triangleAnswers, type GlassFact } from './evidence';
-import { analyseProfile } from './profile';
+import { countAnswers, type GlassFact } from './evidence';
+import { spreadFound } from './found';
 import { reportItems } from './report';
 import { countAll, gatherSaid, viewSeats } from './said';
-import { analyseTriangle } from './triangle';
 import type { EarlyOpeningView, NotYetView, ResultsView, SampleView } from './types';
-import { profileVerdict, triangleVerdict } from './verdict';
-import { commonWarnings, profileWarnings, triangleWarnings } from './warnings';
+import { commonWarnings } from './warnings';
 
 /** What still has to happen before the results of a session in that state can be read. */
 const MISSING: Record<SessionState, string[]> = {
@@ -31,10 +30,10 @@ const MISSING: Record<SessionState, string[]> = {
 /** The question is for those who work in the cellar; people who only taste read the neutral title. */
 const aimFor = (access: Access, session: SessionRow) => (allows(access.roles, 'cellar.view') ? session.privateQuestion || session.title : session.title);
 
-function withCodes(samples: readonly Omit<SampleView, 'codes'>[], glasses: readonly GlassFact[], isProfile: boolean): SampleView[] {
+function withCodes(samples: readonly Omit<SampleView, 'codes'>[], glasses: readonly GlassFact[], isFlight: boolean): SampleView[] {
   return samples.map((sample) => {
     const own = glasses.filter((glass) => glass.sample === sample.sample).sort((a, b) => a.block - b.block);
-    return { ...sample, codes: isProfile ? [...new Set(own.map((glass) => glass.code))] : [] };
+    return { ...sample, codes: isFlight ? [...new Set(own.map((glass) => glass.code))] : [] };
   });
 }
 
@@ -51,19 +50,17 @@ function viewOpenings(db: Tx | Db, session: SessionRow, timeZone: string): Early
 
 function assemble(db: Tx | Db, access: Access, session: SessionRow): ResultsView {
   const { timeZone } = access.cellar;
-  const isProfile = session.method === 'profile';
+  const method = methodOf(session.method);
   const glasses = listGlasses(db, session);
   const seats = listSeats(db, session);
   const items = listItems(db, session);
   const answers = countAnswers(listOperations(db, session));
-  const samples = withCodes(listSamples(db, session, timeZone), glasses, isProfile);
+  const samples = withCodes(listSamples(db, session, timeZone), glasses, method.facts.glassesPerBlock === null);
   const numbers = samples.map((sample) => sample.sample);
-  const counts = countAll({ answers, seats, glasses, items, isProfile });
+  const counts = countAll({ answers, seats, glasses, items, facts: method.facts });
   const seatViews = viewSeats(seats, answers);
   const early = viewOpenings(db, session, timeZone);
-  const lines = items.filter((item) => item.kind === 'line');
-  const profile = isProfile ? analyseProfile({ lines, scores: answers.scores, glasses, seats, samples: numbers, replicates: session.replicates, alpha: session.alpha }) : null;
-  const triangle = isProfile ? null : analyseTriangle(triangleAnswers(answers.choices, glasses, seats), seats, session.alpha);
+  const found = method.analyse({ answers, glasses, seats, items, samples: numbers, replicates: session.replicates, alpha: session.alpha });
   const frame = readFrame(db, session);
   const granted = early.filter((opening) => opening.isGranted).length;
   return {
@@ -71,13 +68,13 @@ function assemble(db: Tx | Db, access: Access, session: SessionRow): ResultsView
       id: session.id, title: session.title, question: aimFor(access, session), method: session.method, state: session.state,
       abandonReason: session.abandonReason, unsealedOn: showMoment(session.unsealedAt!, timeZone), leader: frame.leader,
     },
-    verdict: profile ? profileVerdict(profile, samples) : triangleVerdict(triangle!),
-    warnings: [...commonWarnings(session, counts, seatViews, samples, granted), ...(profile ? profileWarnings(profile) : triangleWarnings(triangle!))],
-    samples, seats: seatViews, counts, profile, triangle,
-    said: gatherSaid({ answers, glasses, seats, items, samples: numbers, blockWord: methodOf(session.method).blockWord }),
+    verdict: method.verdict(found, samples),
+    warnings: [...commonWarnings(session, counts, seatViews, samples, granted), ...method.cautions(found)],
+    samples, seats: seatViews, counts, ...spreadFound(found),
+    said: gatherSaid({ answers, glasses, seats, items, samples: numbers, blockWord: UNIT_WORDS[method.facts.unit].block }),
     earlyOpenings: early,
     report: reportItems({
-      session, aim: aimFor(access, session), frame, samples, counts, early, timeZone,
+      session, facts: method.facts, aim: aimFor(access, session), frame, samples, counts, early, timeZone,
       checkHref: frame.commitment === null ? null : `/check/${frame.commitment}`,
     }),
     commitment: frame.commitment,

@@ -14,7 +14,7 @@ import {
 import { orNull } from './agreement';
 import { completeScores, type LongScore } from './evidence';
 import { levelsOf, mixedLine } from './mixed-line';
-import type { CellView, LineView, PairView, PositionView, TestView } from './types';
+import type { CellView, LineView, PairView, PositionView, ScaleView, TestView } from './types';
 
 /** The numbers of one ballot line; the words of the ballot are added by the caller. */
 export interface LineNumbers
@@ -70,8 +70,9 @@ function scalingOf(table: BalancedScores): TestView | null {
  * by REML over everybody who scored a glass; where that can't be fitted, those who scored all of them.
  * What can't be computed says why in `whyNot`; nothing here is ever NaN.
  * @param products sample numbers, in the order of the cells
+ * @param scale ends of the scale, for the share of scores that lie at them
  */
-export function analyseLine(rows: readonly LongScore[], products: readonly number[], replicates: number, alpha: number): LineNumbers {
+export function analyseLine(rows: readonly LongScore[], products: readonly number[], replicates: number, alpha: number, scale: ScaleView = { low: 0, high: 100 }): LineNumbers {
   const { complete, assessors, leftOut } = completeScores(rows, products.length, replicates);
   const everybody = [...assessors, ...leftOut].sort((a, b) => a - b);
   const numbers: LineNumbers = {
@@ -79,7 +80,7 @@ export function analyseLine(rows: readonly LongScore[], products: readonly numbe
     position: positionOf(rows, everybody, products), atEnds: 0, smallestDifference: null, pairs: [], whyNot: null, table: null,
   };
   if (rows.length === 0) return { ...numbers, whyNot: 'Nobody scored this line.' };
-  numbers.atEnds = scaleUse(rows.map((row) => row.score), { low: 0, high: 100 }).atEnds;
+  numbers.atEnds = scaleUse(rows.map((row) => row.score), scale).atEnds;
   if (assessors.length >= 2) numbers.table = balancedScores(levelsOf(complete, assessors, products));
   if (leftOut.length > 0) {
     const mixed = mixedLine(rows, everybody, products, alpha);

@@ -2,7 +2,7 @@ import { agreementOf } from './agreement';
 import { longScores, type GlassFact, type LongScore, type OperationFact, type SeatFact } from './evidence';
 import { judgePanel, type NamedLine } from './panel';
 import { analyseLine, wereShownToDiffer, type LineNumbers } from './profile-line';
-import type { LineView, ProfileView } from './types';
+import type { LineView, ProfileView, ScaleView } from './types';
 import type { Phase } from '@/db/enums';
 
 export interface LineFact {
@@ -23,6 +23,7 @@ export interface ProfileQuestion {
   samples: readonly number[];
   replicates: number;
   alpha: number;
+  scale: ScaleView;
 }
 
 /** How many lines per sample are named as highest or lowest. */
@@ -59,9 +60,9 @@ const pattern = (numbers: LineNumbers, alpha: number): string => {
 };
 
 /** Everything that a profile session shows: each line, each sample's marks, and the panel itself. */
-export function analyseProfile({ lines, scores, glasses, seats, samples, replicates, alpha }: ProfileQuestion): ProfileView {
+export function analyseProfile({ lines, scores, glasses, seats, samples, replicates, alpha, scale }: ProfileQuestion): ProfileView {
   const rowsOf = longScores(scores, glasses, seats);
-  const analyse = (rows: readonly LongScore[]) => analyseLine(rows, samples, replicates, alpha);
+  const analyse = (rows: readonly LongScore[]) => analyseLine(rows, samples, replicates, alpha, scale);
   const named: (NamedLine & { line: LineFact; rows: LongScore[] })[] = lines.map((line) => {
     const rows = rowsOf.get(line.item) ?? [];
     return { line, name: line.name, rows, numbers: analyse(rows) };
@@ -73,6 +74,7 @@ export function analyseProfile({ lines, scores, glasses, seats, samples, replica
   };
   const views = named.map(({ line, numbers }) => lineView(line, numbers));
   return {
+    scale,
     lines: views,
     replicates,
     alpha,

@@ -1,8 +1,9 @@
 import type { SessionRow } from '../sessions/find';
+import type { MethodFacts } from '../methods/types';
 import { showMoment } from '../time';
 import { VESSEL_WORDS } from '../register/format';
 import { ALLERGEN_WORDS } from '../seats/allergens';
-import { count, DRAW_WORDS, listWords, METHOD_WORDS, showPercent } from './format';
+import { count, DRAW_WORDS, listWords, showPercent } from './format';
 import type { CountsView, EarlyOpeningView, ReportItem, SampleView } from './types';
 
 function identity(sample: SampleView): string {
@@ -14,13 +15,9 @@ function identity(sample: SampleView): string {
   return `${sample.label}${sample.isControl ? ' (control)' : ''}${parts.length > 0 ? `: ${parts.join(' + ')}` : ''}${codes}`;
 }
 
-const ORDERS = {
-  profile: 'Williams squares, balanced for position and for what came before, dealt in whole squares and drawn anew for each flight',
-  triangle: 'The six orders, dealt in blocks of six and drawn anew for each set (ISO 4120, clause 7.1)',
-};
-
 interface ReportQuestion {
   session: SessionRow;
+  facts: MethodFacts;
   aim: string;
   frame: { leader: string; pourers: string[]; commitment: string | null };
   samples: readonly SampleView[];
@@ -41,17 +38,17 @@ function panelWords(session: SessionRow, counts: CountsView): string {
 }
 
 /** The items that a report of the test owes (ISO 4120 and ISO 13299 in outline), and what was not recorded. */
-export function reportItems({ session, aim, frame, samples, counts, early, timeZone, checkHref }: ReportQuestion): ReportItem[] {
+export function reportItems({ session, facts, aim, frame, samples, counts, early, timeZone, checkHref }: ReportQuestion): ReportItem[] {
   const when = (at: Date | null) => (at ? showMoment(at, timeZone) : 'not');
   const items: (ReportItem | false)[] = [
     { name: 'Aim', text: aim },
-    { name: 'Method', text: METHOD_WORDS[session.method] },
+    { name: 'Method', text: facts.reportName },
     ...samples.map((sample) => ({ name: sample.isControl ? 'Control' : 'Sample', text: identity(sample) })),
     { name: 'Panel', text: panelWords(session, counts) },
-    { name: session.method === 'profile' ? 'Replicates' : 'Sets each', text: String(session.replicates) },
+    { name: facts.unit === 'glass' ? 'Replicates' : 'Sets each', text: String(session.replicates) },
     { name: 'Risk', text: `alpha ${showPercent(session.alpha)}, chosen before serving` },
-    { name: 'Scale', text: session.method === 'profile' ? 'Line from 0 to 100 in steps of 1, anchored in words at both ends, no number shown before the touch' : 'Forced choice of one glass of three; a guess is said' },
-    { name: 'Orders', text: ORDERS[session.method] },
+    { name: 'Scale', text: facts.scale },
+    { name: 'Orders', text: facts.orders },
     { name: 'Serving', text: [session.servingTemperatureC !== null ? `${session.servingTemperatureC} °C` : 'temperature not recorded', `${session.servingVolumeMl} mL`, `${session.restS} s rest between glasses`, 'spit'].join(', ') },
     { name: 'Instruction', text: session.instruction },
     { name: 'Declared', text: session.allergens.length > 0 ? session.allergens.map((a) => ALLERGEN_WORDS[a]).join(', ') : 'no allergen' },

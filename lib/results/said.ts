@@ -1,5 +1,7 @@
 import { glassFinder, type CountedAnswers, type GlassFact, type OperationFact, type SeatFact } from './evidence';
 import type { ItemFact } from './data';
+import { OWED_KINDS } from '../ballots/types';
+import type { MethodFacts } from '../methods/types';
 import type { CountsView, SaidView, SeatView } from './types';
 
 interface SaidQuestion {
@@ -40,7 +42,7 @@ export function gatherSaid({ answers, glasses, seats, items, samples, blockWord 
   return { comments, faults };
 }
 
-const answersOf = (answers: CountedAnswers): OperationFact[] => [...answers.scores, ...answers.faults, ...answers.choices, ...answers.comments];
+const answersOf = (answers: CountedAnswers): OperationFact[] => [...answers.scores, ...answers.faults, ...answers.choices, ...answers.orders, ...answers.comments];
 
 /** The seats that were taken, with how much of each counts. */
 export function viewSeats(seats: readonly SeatFact[], answers: CountedAnswers): SeatView[] {
@@ -57,18 +59,20 @@ export function viewSeats(seats: readonly SeatFact[], answers: CountedAnswers): 
 const isForNose = (item: ItemFact) => item.phase === 'look' || item.phase === 'nose';
 
 /** What was counted, replaced, taken back, late and never given. */
-export function countAll(q: { answers: CountedAnswers; seats: readonly SeatFact[]; glasses: readonly GlassFact[]; items: readonly ItemFact[]; isProfile: boolean }): CountsView {
-  const { answers, seats, glasses, items, isProfile } = q;
+export function countAll(q: { answers: CountedAnswers; seats: readonly SeatFact[]; glasses: readonly GlassFact[]; items: readonly ItemFact[]; facts: MethodFacts }): CountsView {
+  const { answers, seats, glasses, items, facts } = q;
   const views = viewSeats(seats, answers);
-  const lines = items.filter((item) => item.kind === 'line');
+  // What is ticked or rated only where it applies is never owed.
+  const lines = items.filter((item) => OWED_KINDS.includes(item.kind));
+  const isSets = facts.unit === 'set';
   const expected = seats
     .filter((seat) => seat.isClaimed)
     .reduce((sum, seat) => {
       const own = glasses.filter((glass) => glass.seatId === seat.id);
-      if (!isProfile) return sum + new Set(own.map((glass) => glass.block)).size;
+      if (isSets) return sum + new Set(own.map((glass) => glass.block)).size;
       return sum + own.length * (seat.role === 'nose_only' ? lines.filter(isForNose).length : lines.length);
     }, 0);
-  const given = isProfile ? answers.scores.length : answers.choices.length;
+  const given = isSets ? answers.choices.length + answers.orders.length : answers.scores.filter((op) => lines.some((line) => line.item === op.item)).length;
   return {
     counted: answersOf(answers).length,
     replaced: answers.replaced,

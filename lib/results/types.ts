@@ -27,7 +27,7 @@ export interface SampleView {
   label: string;
   isControl: boolean;
   components: ComponentView[];
-  /** Profile: the code of each block. Triangle: empty, every glass had its own. */
+  /** Served in flights: the code of each block. Sets: empty, every glass had its own. */
   codes: string[];
 }
 
@@ -149,7 +149,14 @@ export interface PanelView {
   panelists: PanelistView[];
 }
 
+/** The ends of a scale. */
+export interface ScaleView {
+  low: number;
+  high: number;
+}
+
 export interface ProfileView {
+  scale: ScaleView;
   lines: LineView[];
   replicates: number;
   alpha: number;
@@ -158,7 +165,8 @@ export interface ProfileView {
   panel: PanelView;
 }
 
-export interface TriangleView {
+/** A forced choice with a right answer: triangle, tetrad, duo-trio, two out of five. */
+export interface ChoiceView {
   n: number;
   correct: number;
   guesses: number;
@@ -166,6 +174,10 @@ export interface TriangleView {
   sets: number;
   unanswered: number;
   alpha: number;
+  /** Chance of a right answer by guessing. */
+  chance: number;
+  /** Serving orders of the method: answers come in full rounds of so many. */
+  orders: number;
   /** Exact one-sided binomial. */
   p: number | null;
   /** Smallest number correct that would have been significant; null when none would. */
@@ -173,14 +185,113 @@ export interface TriangleView {
   isShown: boolean;
   /** Proportion of distinguishers, exact (Clopper–Pearson) two-sided limits at 95 %; not cut at 0. */
   pd: { value: number; lower: number; upper: number } | null;
-  /** Thurstone's d′ with likelihood limits at 95 %; null where all found the odd glass (no upper end). */
+  /** Thurstone's d′ with likelihood limits at 95 %; null where all were right (no upper end) or the method has none. */
   dPrime: { value: number | null; lower: number; upper: number | null } | null;
   /** True shares of distinguishers and the chance that this panel would have shown them. */
   power: { pd: number; power: number }[];
   /** Smallest panel that shows half the people tasting it, at 80 %. */
   neededForHalf: number;
   whyNot: string | null;
-  bySeat: { seat: number; name: string | null; sets: { set: number; isCorrect: boolean | null; isGuess: boolean }[] }[];
+  bySeat: SeatSets[];
+}
+
+/** What one seat answered, set by set. `isCorrect` is null where it did not answer. */
+export interface SeatSets {
+  seat: number;
+  name: string | null;
+  sets: { set: number; isCorrect: boolean | null; isGuess: boolean }[];
+}
+
+/** Two samples and the one that was chosen: which has more of it, or which is liked better. No answer is right. */
+export interface PairFoundView {
+  asks: 'more' | 'liked';
+  /** What there is more of; null for liking. */
+  trait: string | null;
+  n: number;
+  unanswered: number;
+  sets: number;
+  alpha: number;
+  /** Sample and how often it was chosen, in the order of samples. */
+  chosen: { sample: number; count: number }[];
+  /** Exact two-sided binomial that both are chosen equally often. */
+  p: number | null;
+  /** Smallest count of the more chosen one that would have shown a difference; null when none would. */
+  needed: number | null;
+  isShown: boolean;
+  /** Share of the answers for the first sample, with exact limits at 95 %. */
+  share: LimitedView | null;
+  whyNot: string | null;
+  bySeat: { seat: number; name: string | null; sets: { set: number; sample: number | null; isGuess: boolean }[] }[];
+}
+
+/** Samples in an order from least to most of a trait. */
+export interface OrderView {
+  trait: string;
+  /** People whose orders are whole. */
+  assessors: number;
+  leftOut: number[];
+  replicates: number;
+  alpha: number;
+  /** Rank sums (1 = least) in the order of samples; letters as elsewhere, by rank sums' HSD. */
+  cells: { sample: number; rankSum: number; meanRank: number; letters: string }[];
+  friedman: { statistic: number; df: number; p: number; isExact: boolean } | null;
+  kendallW: number | null;
+  /** Difference of rank sums that was shown at alpha, allowing for all pairs. */
+  hsd: number | null;
+  isShown: boolean;
+  whyNot: string | null;
+  bySeat: { seat: number; name: string | null; orders: { block: number; samples: number[] }[] }[];
+}
+
+/** One word that was ticked, or found in what was written. */
+export interface TickLineView {
+  item: number;
+  name: string;
+  phase: Phase;
+  /** Out of the glasses that were answered; mean strength where it was rated. */
+  counts: { sample: number; ticked: number; of: number; strength: number | null; letters: string }[];
+  /** Cochran's Q over people who answered every sample; null where it can't be told. */
+  p: number | null;
+  isExact: boolean;
+  /** Mean liking of glasses with the word less that of glasses without it. */
+  lift: { difference: number; with: number; without: number } | null;
+}
+
+export interface TicksView {
+  kind: 'check' | 'term';
+  lines: TickLineView[];
+  assessors: number;
+  alpha: number;
+  liking: LineView | null;
+  whyNot: string | null;
+}
+
+/** How much of a trait was right, for one sample. */
+export interface RightCellView {
+  sample: number;
+  n: number;
+  /** Answers at each of the five points. */
+  counts: number[];
+  low: RightSideView;
+  high: RightSideView;
+  /** Share of "just right". */
+  right: number;
+}
+
+export interface RightSideView {
+  share: number;
+  /** Liking lost against those who found it just right; null where a group is empty. */
+  drop: number | null;
+  p: number | null;
+  /** Chosen by a fifth or more, with a drop that was shown. */
+  isMarked: boolean;
+}
+
+export interface RightView {
+  lines: { item: number; name: string; phase: Phase; cells: RightCellView[] }[];
+  alpha: number;
+  liking: LineView | null;
+  whyNot: string | null;
 }
 
 /** What was written and which faults were noted. */
@@ -233,8 +344,13 @@ export interface ResultsView {
   samples: SampleView[];
   seats: SeatView[];
   counts: CountsView;
+  /** One of these, by the method. */
   profile: ProfileView | null;
-  triangle: TriangleView | null;
+  choice: ChoiceView | null;
+  pair: PairFoundView | null;
+  order: OrderView | null;
+  ticks: TicksView | null;
+  right: RightView | null;
   said: SaidView;
   earlyOpenings: EarlyOpeningView[];
   report: ReportItem[];

@@ -1,6 +1,6 @@
-import { count, listWords, sayP, shortName, showPercent } from './format';
+import { listWords, sayP, shortName } from './format';
 import { wereShownToDiffer } from './profile-line';
-import type { CellView, LineView, ProfileView, SampleView, TriangleView, VerdictView } from './types';
+import type { CellView, LineView, ProfileView, SampleView, ScaleView, VerdictView } from './types';
 
 type Names = ReadonlyMap<number, string>;
 
@@ -65,16 +65,18 @@ function shownSentences(shown: readonly LineView[], samples: readonly SampleView
   ];
 }
 
-function range(values: readonly number[]): string {
-  const [low, high] = [Math.min(...values), Math.max(...values)];
-  return Math.round(low) === Math.round(high) ? `${Math.round(low)} points` : `${Math.round(low)} to ${Math.round(high)} points`;
+/** "7 to 9 points of 100"; on a short scale with a decimal. */
+function range(values: readonly number[], { low: from, high: to }: ScaleView): string {
+  const show = (value: number) => (to - from >= 50 ? String(Math.round(value)) : value.toFixed(1));
+  const [low, high] = [show(Math.min(...values)), show(Math.max(...values))];
+  return `${low === high ? low : `${low} to ${high}`} points on the scale from ${from} to ${to}`;
 }
 
 function profileReach(notShown: readonly LineView[], profile: ProfileView): string[] {
   const reach: string[] = [];
   const missed = notShown.flatMap((line) => line.smallestDifference ?? []);
   if (missed.length > 0) {
-    reach.push(`Not shown is not alike: on ${missed.length === 1 ? 'that line' : 'those lines'} this panel could have shown no difference between two samples smaller than ${range(missed)} of 100.`);
+    reach.push(`Not shown is not alike: on ${missed.length === 1 ? 'that line' : 'those lines'} this panel could have shown no difference between two samples smaller than ${range(missed, profile.scale)}.`);
   }
   reach.push('It speaks of these pulls, on that day, to this panel. How much of a trait is wanted, and whether a barrel is ready, the cellar decides.');
   if (profile.lines.some((line) => line.product)) reach.push('Barrels of one lot differ: what is shown of a barrel is not shown of its lot.');
@@ -99,28 +101,3 @@ export function profileVerdict(profile: ProfileView, samples: readonly SampleVie
   if (notShown.length > 0) sentences.push(`No difference was shown in ${listWords(notShown.map((line) => lower(line.name)), 'or')}.`);
   return { headline, sentences, reach: profileReach(notShown, profile) };
 }
-
-function limitsWords({ value, lower: low, upper: high }: NonNullable<TriangleView['pd']>): string {
-  const best = value <= 0 ? 'none' : showPercent(value);
-  return `The best guess of the share of people who taste a difference is ${best}; ${low <= 0 ? 'none' : showPercent(low)} to ${showPercent(Math.max(0, high))} would fit these answers too.`;
-}
-
-/** What a triangle session says, in sentences. */
-export function triangleVerdict(triangle: TriangleView): VerdictView {
-  const { n, correct, p, minimumCorrect: least, pd, isShown, alpha } = triangle;
-  if (p === null || pd === null) return { headline: 'Nothing could be tested.', sentences: [triangle.whyNot ?? ''], reach: [] };
-  const headline = `${isShown ? 'A difference was shown' : 'No difference was shown'}: ${correct} of ${n} found the odd glass.`;
-  const needed = least === null ? `With ${count(n, 'answer')} no number correct would have been enough at ${showPercent(alpha)}.` : `${least} of ${n} were needed at ${showPercent(alpha)} risk.`;
-  const sentences = [`${needed} Guessing alone gives ${correct} or more with ${sayP(p)}.`];
-  const beside = [limitsWords(pd)];
-  if (triangle.guesses > 0) beside.push(`${triangle.guesses} of ${n} said that they guessed; ${triangle.correctGuesses === 0 ? 'none' : triangle.correctGuesses} of those ${triangle.correctGuesses < 2 ? 'was' : 'were'} right.`);
-  const half = triangle.power.find((point) => point.pd === 0.3);
-  const reach = isShown
-    ? ['It says that the two differ, not in what, nor which is better: a paired test or a profile answers that.', 'It speaks of these two pulls, on that day, to this panel.']
-    : [
-        `Not shown is not alike: had ${showPercent(half!.pd)} of people tasted a difference, this test would have shown it with a chance of ${showPercent(half!.power)}.`,
-        'To claim likeness, plan a test for it beforehand, with about 60 people (ISO 4120).',
-      ];
-  return { headline, sentences, reach: [...beside, ...reach] };
-}
-

@@ -1,7 +1,7 @@
 import type { SessionRow } from '../sessions/find';
 import { count, listWords, sayP, showPercent } from './format';
 import { wereShownToDiffer } from './profile-line';
-import type { CountsView, LineView, ProfileView, SampleView, SeatView, TriangleView } from './types';
+import type { CountsView, LineView, ProfileView, SampleView, SeatView } from './types';
 
 /** Fewest trained panelists that a profile is usually scored by. */
 const PROFILE_PANEL = 8;
@@ -46,7 +46,9 @@ function servingWarnings(profile: ProfileView): string[] {
   }
   const scaled = profile.lines.filter((line) => line.scaling && line.scaling.p <= profile.alpha);
   if (scaled.length > 0) warnings.push(`Panelists spread their scores differently on ${namesOf(scaled)}: some use much more of the line than others. Means lean towards those who use more.`);
-  const ended = profile.lines.filter((line) => line.atEnds > MANY_AT_ENDS);
+  // On a short scale the ends are answers like the others.
+  const isLong = profile.scale.high - profile.scale.low >= 50;
+  const ended = !isLong ? [] : profile.lines.filter((line) => line.atEnds > MANY_AT_ENDS);
   if (ended.length > 0) warnings.push(`Many scores of ${namesOf(ended)} lie at an end of the line. Differences beyond the end can’t be seen; other anchors would help next time.`);
   return warnings;
 }
@@ -79,18 +81,6 @@ export function profileWarnings(profile: ProfileView): string[] {
   if (tested.length >= MANY_LINES) {
     warnings.push(`${tested.length} lines were tested, each at ${showPercent(profile.alpha)}: with no difference at all about ${(tested.length * profile.alpha).toFixed(1)} of them would still seem to show one. A single line that stands out is exploratory until it is tasted again.`);
   }
-  return warnings;
-}
-
-/** The assumptions and weak points that travel with a triangle test. */
-export function triangleWarnings(triangle: TriangleView): string[] {
-  const warnings: string[] = [];
-  if (triangle.n > 0 && triangle.n < triangle.neededForHalf) {
-    warnings.push(`${count(triangle.n, 'answer')} can show only a gross difference: ${triangle.neededForHalf} show one that half of the people taste (${showPercent(triangle.alpha)} and 20 % risk).`);
-  }
-  if (triangle.unanswered > 0) warnings.push(`${count(triangle.unanswered, 'set')} unanswered: not counted as right or wrong.`);
-  if (triangle.n > 0 && triangle.n % 6 !== 0) warnings.push('The six orders did not come equally often, so a leaning to one place is not wholly evened out.');
-  if (triangle.sets > 1) warnings.push('Several sets by one person: the test of a difference stays valid, a claim of likeness would not (ISO 10399, note to 6.2, by analogy).');
   return warnings;
 }
 

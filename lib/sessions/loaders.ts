@@ -1,6 +1,6 @@
 import 'server-only';
 import { getDb } from '@/db/client';
-import { SESSION_STATES } from '@/db/enums';
+import { METHODS, SESSION_STATES, type Method } from '@/db/enums';
 import { earlyOpenings, operations, seals, users } from '@/db/schema';
 import { and, asc, count, eq } from 'drizzle-orm';
 import encodeQR from 'qr';
@@ -8,6 +8,7 @@ import { loadAccess, type Access } from '../auth/access';
 import { allows } from '../auth/permissions';
 import { isPourer, isTaster } from '../blind/read-key';
 import { methodOf } from '../methods';
+import { factsOf, METHOD_FACTS } from '../methods/facts';
 import { reach } from '../reach';
 import { localInput, showMoment } from '../time';
 import { designOf, listDescriptors, listMembers, listPullChoices, listSessionRows, namesInSession } from './data';
@@ -20,6 +21,9 @@ export function qrPicture(text: string): string {
   const svg = encodeQR(text, 'svg', { border: 4, ecc: 'medium' });
   return `data:image/svg+xml;base64,${Buffer.from(svg).toString('base64')}`;
 }
+
+/** Of a ballot that is the whole lexicon the page names the beginning. */
+const LINES_SHOWN = 60;
 
 export const SESSION_SORTS = ['when', 'title', 'state', 'leader'] as const;
 export type SessionSort = (typeof SESSION_SORTS)[number];
@@ -103,7 +107,7 @@ export async function loadSession(slug: string, sessionId: string): Promise<{ ac
       leader: nameOf(row.leaderId),
       scheduledFor: show(row.scheduledFor),
       samples: mayDesign || row.unsealedAt ? design.samples.map(({ label, isControl }) => ({ label, isControl })).sort((a, b) => a.label.localeCompare(b.label, 'en', { numeric: true })) : [],
-      lines: design.items.filter((item) => item.kind === 'line').map(({ name, phase }) => ({ name, phase })),
+      lines: design.items.filter((item) => item.kind !== 'flag').slice(0, LINES_SHOWN).map(({ name, phase }) => ({ name, phase })),
       flags: design.items.filter((item) => item.kind === 'flag').map((item) => item.name),
       pourers: design.pourers.map((pourer) => pourer.name),
       seatsPlanned: row.seatsPlanned, reservesPlanned: row.reservesPlanned, replicates: row.replicates, alpha: row.alpha,
@@ -134,6 +138,7 @@ function designChoices(access: Access, chosenPulls: readonly string[]): DesignCh
       return { family, sense: own[0]!.sense, entries: own.map((entry) => ({ value: `${entry.id}:${entry.phase}`, label: entry.name, phase: entry.phase })) };
     }),
     faults: entries.filter((entry) => entry.sense === 'fault').map((entry) => ({ value: entry.id, label: entry.name })),
+    methods: Object.values(METHOD_FACTS),
     members: listMembers(db, id).map((member) => ({ value: member.id, label: member.name })),
   };
 }
@@ -143,10 +148,10 @@ const NEW_SESSION = {
   instruction: 'Taste each glass by itself, in the order of the sheet. Spit, rinse and wait between glasses.',
 };
 
-/** The empty form of a new session. */
-export async function loadNewDesign(slug: string) {
+/** The empty form of a new session, with the method that was chosen on the way. */
+export async function loadNewDesign(slug: string, method?: string) {
   const access = await loadAccess(slug, 'session.design');
-  return { access, choices: designChoices(access, []), defaults: { ...NEW_SESSION, leaderId: access.user.id } as Record<string, unknown> };
+  return { access, choices: designChoices(access, []), defaults: { ...NEW_SESSION, ...(METHODS.includes(method as Method) && { method, replicates: factsOf(method as Method).unit === 'set' ? 1 : NEW_SESSION.replicates }), leaderId: access.user.id } as Record<string, unknown> };
 }
 
 /** The form of a draft; null once it is sealed. */
@@ -160,7 +165,7 @@ export async function loadDesign(slug: string, sessionId: string) {
     method: row.method, title: row.title, instruction: row.instruction, privateQuestion: row.privateQuestion, leaderId: row.leaderId,
     scheduledFor: row.scheduledFor ? localInput(row.scheduledFor, access.cellar.timeZone) : '', pulls: pullIds,
     controlLabel: design.samples.find((sample) => sample.isControl)?.label ?? '',
-    lines: design.items.filter((item) => item.kind === 'line').map((item) => `${item.descriptorId}:${item.phase}`),
+    lines: design.items.filter((item) => item.kind === factsOf(row.method).items?.kind && factsOf(row.method).items?.from === 'chosen').map((item) => `${item.descriptorId}:${item.phase}`),
     flags: design.items.filter((item) => item.kind === 'flag').map((item) => item.descriptorId),
     seatsPlanned: row.seatsPlanned, reservesPlanned: row.reservesPlanned, replicates: row.replicates, alpha: row.alpha,
     servingTemperatureC: row.servingTemperatureC ?? '', servingVolumeMl: row.servingVolumeMl, restS: row.restS, allergens: row.allergens,

@@ -1,7 +1,7 @@
 import 'server-only';
 import { getDb, type Tx } from '@/db/client';
-import { PHASES, type Phase } from '@/db/enums';
-import { ballotItems, oneTimeLinks, pulls, fills, sampleComponents, samples, seatPeople, seats, sessionPourers, sessions, vessels } from '@/db/schema';
+import { PHASES, type ItemKind, type Phase } from '@/db/enums';
+import { ballotItems, descriptors, oneTimeLinks, pulls, fills, sampleComponents, samples, seatPeople, seats, sessionPourers, sessions, vessels } from '@/db/schema';
 import { and, eq, inArray } from 'drizzle-orm';
 import { recordAudit } from '../audit/record';
 import { requireCapability, type Access } from '../auth/access';
@@ -9,6 +9,8 @@ import { createLink } from '../auth/links';
 import { now } from '../clock';
 import { AppError } from '../errors';
 import { newId } from '../ids';
+import { overallLiking } from '../lexicon/overall-liking';
+import { factsOf } from '../methods/facts';
 import { fromLocalInput } from '../time';
 import { listDescriptors, listMembers } from './data';
 import { findSession, requireState } from './find';
@@ -45,15 +47,33 @@ function writeSamples(tx: Tx, cellarId: string, sessionId: string, input: DraftI
   if (input.controlLabel) insert(input.controlLabel, chosen.length + 1, true);
 }
 
+interface WantedItem {
+  id: string;
+  phase: Phase;
+  kind: ItemKind;
+}
+
+/** The ballot's lines by the method's rule: the leader's choice, or the whole lexicon, and what the method asks by itself. */
+function wantedItems(tx: Tx, cellarId: string, input: DraftInput, lexicon: readonly (typeof descriptors.$inferSelect)[]): WantedItem[] {
+  const rule = factsOf(input.method).items;
+  if (!rule) return [];
+  const lines: WantedItem[] =
+    rule.from === 'whole'
+      ? lexicon.slice(0, rule.max).map(({ id, phase }) => ({ id, phase, kind: rule.kind }))
+      : rule.from === 'chosen'
+        ? [...new Set(input.lines)].slice(0, rule.max).map((line) => ({ id: line.slice(0, 36), phase: line.slice(37) as Phase, kind: rule.kind }))
+        : [];
+  const flags: WantedItem[] = rule.hasFlags ? [...new Set(input.flags)].map((id) => ({ id, phase: 'nose', kind: 'flag' })) : [];
+  const liking: WantedItem[] = rule.asksLiking ? [{ id: overallLiking(tx, cellarId).id, phase: 'after', kind: 'liking' }] : [];
+  return [...lines, ...flags, ...liking];
+}
+
 /** @throws AppError `invalid` when a descriptor is not in the cellar's lexicon */
 function writeBallot(tx: Tx, cellarId: string, sessionId: string, input: DraftInput): void {
   tx.delete(ballotItems).where(eq(ballotItems.sessionId, sessionId)).run();
-  if (input.method !== 'profile') return;
-  const lexicon = new Map(listDescriptors(tx, cellarId).map((entry) => [entry.id, entry]));
-  const wanted = [
-    ...[...new Set(input.lines)].map((line) => ({ id: line.slice(0, 36), phase: line.slice(37) as Phase, kind: 'line' as const })),
-    ...[...new Set(input.flags)].map((id) => ({ id, phase: 'nose' as const, kind: 'flag' as const })),
-  ];
+  const entries = listDescriptors(tx, cellarId);
+  const wanted = wantedItems(tx, cellarId, input, entries);
+  const lexicon = new Map([...entries, ...(wanted.some((item) => item.kind === 'liking') ? [overallLiking(tx, cellarId)] : [])].map((entry) => [entry.id, entry]));
   // In the order in which a glass is tasted; within a part as chosen.
   wanted.sort((a, b) => PHASES.indexOf(a.phase) - PHASES.indexOf(b.phase));
   const seen = new Set<string>();

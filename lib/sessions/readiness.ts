@@ -2,12 +2,12 @@ import 'server-only';
 import { ballotItems, sampleComponents, samples, sessionPourers } from '@/db/schema';
 import type { Db, Tx } from '@/db/client';
 import { and, eq } from 'drizzle-orm';
-import { methodOf } from '../methods';
+import { factsOf } from '../methods/facts';
 import type { SessionRow } from './find';
 
 /** What still keeps a draft from being sealed, in words for the leader; empty when nothing does. */
 export function listMissing(db: Tx | Db, session: SessionRow): string[] {
-  const method = methodOf(session.method);
+  const method = factsOf(session.method);
   const missing: string[] = [];
   const own = db.select().from(samples).where(and(eq(samples.sessionId, session.id), eq(samples.cellarId, session.cellarId))).all();
   const { min, max } = method.sampleCount;
@@ -21,9 +21,10 @@ export function listMissing(db: Tx | Db, session: SessionRow): string[] {
     if (parts.length === 0) missing.push(`${sample.label} has no pull.`);
     else if (Math.abs(total - 1) > 1e-6) missing.push(`The parts of ${sample.label} add up to ${Math.round(total * 100)} %, not 100 %.`);
   }
-  if (method.hasItems) {
-    const lines = db.select().from(ballotItems).where(eq(ballotItems.sessionId, session.id)).all();
-    if (!lines.some((line) => line.kind === 'line')) missing.push('The ballot has no descriptor to score.');
+  if (method.items?.from === 'chosen') {
+    const { kind, min } = method.items;
+    const lines = db.select().from(ballotItems).where(and(eq(ballotItems.sessionId, session.id), eq(ballotItems.kind, kind))).all();
+    if (lines.length < min) missing.push(lines.length === 0 ? 'The ballot has no descriptor to ask for.' : `The ballot asks for ${min} descriptors at least; there is ${lines.length}.`);
   }
   const pourers = db.select().from(sessionPourers).where(eq(sessionPourers.sessionId, session.id)).all();
   if (pourers.length === 0) missing.push('Nobody is named to pour: without a pourer nobody could read which bottle gets which code.');

@@ -65,6 +65,12 @@ function describeSamples(tx: Tx, session: SessionRow): PlanFile['samples'] {
   }));
 }
 
+/** The sample of a constant reference: the control, or else the first. */
+function referenceOf(tx: Tx, sessionId: string): number {
+  const own = tx.select({ isControl: samples.isControl }).from(samples).where(eq(samples.sessionId, sessionId)).orderBy(asc(samples.ordinal)).all();
+  return Math.max(1, own.findIndex((sample) => sample.isControl) + 1);
+}
+
 /** Numbered seats, then reserves: each with its own plan. @returns the seats' ids in order */
 function makeSeats(tx: Tx, session: SessionRow): string[] {
   const count = session.seatsPlanned + session.reservesPlanned;
@@ -94,7 +100,7 @@ export function sealSession(access: Access, sessionId: string, draw: Draw = syst
     const ballot = fixBallot(tx, session);
     const described = describeSamples(tx, session);
     const seatIds = makeSeats(tx, session);
-    const planned = methodOf(session.method).plan({ sampleCount: described.length, seatCount: seatIds.length, replicates: session.replicates }, draw);
+    const planned = methodOf(session.method).plan({ sampleCount: described.length, seatCount: seatIds.length, replicates: session.replicates, reference: referenceOf(tx, session.id) }, draw);
     for (const { seat, block, position, code } of planned) {
       tx.insert(servings).values({ id: newId(), cellarId: session.cellarId, sessionId, seatId: seatIds[seat - 1]!, block, position, code }).run();
     }

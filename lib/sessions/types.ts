@@ -1,4 +1,5 @@
 import type { Allergen, Method, SessionState } from '@/db/enums';
+import type { MethodFacts } from '../methods/types';
 
 export interface SessionListItem {
   id: string;
@@ -76,4 +77,5 @@ export interface DesignChoices {
   lexicon: { family: string; sense: string; entries: (Choice & { phase: string })[] }[];
   faults: Choice[];
   members: Choice[];
+  methods: MethodFacts[];
 }

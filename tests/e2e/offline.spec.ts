@@ -78,3 +78,27 @@ test('undo, clear, the other hand and another language, by touch', async ({ brow
   await expect(line).toHaveAttribute('aria-valuenow', first!);
   await phone.context().close();
 });
+
+test('nothing moves under the finger when the signal goes and comes', async ({ browser }) => {
+  const phone = await joinAsGuest(browser, readDemo(e2eFolder()).joinPath, 'Still', 'fr');
+  await expect(phone.locator('main[aria-busy=false]')).toBeVisible();
+  const places = () => phone.getByRole('slider').evaluateAll((lines) => lines.map((line) => Math.round(line.getBoundingClientRect().top + scrollY)));
+  const first = await places();
+  const tap = async (n: number) => {
+    const box = (await phone.getByRole('slider').nth(n).boundingBox())!;
+    await phone.touchscreen.tap(box.x + box.width * 0.4, box.y + box.height / 2);
+  };
+  const stateOf = (n: number) => phone.locator('.item').nth(n).locator('.state');
+  await phone.context().setOffline(true);
+  await tap(0);
+  await expect(stateOf(0)).toContainText('sur ce téléphone');
+  expect(await places()).toEqual(first);
+  // The trouble is told where it pushes nothing away.
+  await expect(phone.locator('.foot-bar .caution')).toBeVisible({ timeout: 20_000 });
+  expect(await places()).toEqual(first);
+  await phone.context().setOffline(false);
+  await expect(stateOf(0)).toContainText('reçu', { timeout: 20_000 });
+  await expect(phone.locator('.foot-bar .caution')).toHaveCount(0);
+  expect(await places()).toEqual(first);
+  await phone.context().close();
+});

@@ -4,6 +4,7 @@ import type { Method, Phase, Role } from '@/db/enums';
 import {
   ballotItems, cellars, descriptors, fills, lots, membershipRoles, memberships, operations, pulls, sampleComponents, samples, seatPeople, seats, sessionPourers, sessions, users, vessels,
 } from '@/db/schema';
+import { valuesOf } from '@/lib/ballots/values';
 import { accessOf, type Access } from '@/lib/auth/access';
 import type { OperationBody } from '@/lib/ballots/schema';
 import { takeOut } from '@/lib/blind/vault';
@@ -110,12 +111,8 @@ export function openTasting(scene: Scene, design: Design, taken = design.seats):
   const say: Tasting['say'] = (seat, body, more = {}) => {
     const seq = more.seq ?? (seqs.get(seat) ?? 0) + 1;
     seqs.set(seat, Math.max(seq, seqs.get(seat) ?? 0));
-    const place = 'block' in body ? { block: body.block, position: body.position } : {};
     db.insert(operations).values({
-      opId: newId(), cellarId, sessionId, seatId: own[seat - 1]!.id, tokenGeneration: more.generation ?? 1, deviceId: newId(), seq, kind: body.kind, ...place,
-      item: 'item' in body ? body.item : null,
-      valueNumber: body.kind === 'score' ? body.value : body.kind === 'fault' ? Number(body.isNoted) : null,
-      valueText: body.kind === 'comment' ? body.text : null, isGuess: body.kind === 'choice' ? body.isGuess : null,
+      opId: newId(), cellarId, sessionId, seatId: own[seat - 1]!.id, tokenGeneration: more.generation ?? 1, deviceId: newId(), seq, kind: body.kind, ...valuesOf(body),
       bodyHash: sha256Hex(JSON.stringify(body)), clientAt: AT, receivedAt: AT, admission: more.isLate ? 'late' : 'counted',
     }).run();
   };

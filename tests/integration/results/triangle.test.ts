@@ -32,7 +32,7 @@ function finish(tasting: Tasting) {
 
 describe('a triangle session', () => {
   it('shows a difference with 8 of 12', () => {
-    const { triangle, verdict } = finish(taste(12, 8));
+    const { choice: triangle, verdict } = finish(taste(12, 8));
     // Exact: (495·16 + 220·8 + 66·4 + 12·2 + 1) / 3^12 = 9969/531441; 8 of 12 is ISO 4120 table A.1 at 5 %.
     expect(triangle!.p).toBeCloseTo(9969 / 531441, 12);
     expect(triangle).toMatchObject({ n: 12, correct: 8, minimumCorrect: 8, isShown: true, guesses: 1, correctGuesses: 0 });
@@ -40,13 +40,13 @@ describe('a triangle session', () => {
     expect(triangle!.pd!.value).toBeCloseTo(0.5, 12);
     expect(triangle!.pd!.lower).toBeCloseTo((0.3488755 - 1 / 3) * 1.5, 6);
     expect(triangle!.pd!.upper).toBeCloseTo((0.9007539 - 1 / 3) * 1.5, 6);
-    expect(verdict.headline).toBe('A difference was shown: 8 of 12 found the odd glass.');
+    expect(verdict.headline).toBe('A difference was shown: 8 of 12 answers were right.');
   });
 
   it('never calls two alike when none was shown', () => {
-    const { triangle, verdict, warnings } = finish(taste(12, 7));
+    const { choice: triangle, verdict, warnings } = finish(taste(12, 7));
     expect(triangle).toMatchObject({ correct: 7, isShown: false });
-    expect(verdict.headline).toBe('No difference was shown: 7 of 12 found the odd glass.');
+    expect(verdict.headline).toBe('No difference was shown: 7 of 12 answers were right.');
     expect(verdict.reach.join(' ')).toContain('Not shown is not alike');
     expect([verdict.headline, ...verdict.sentences].join(' ')).not.toMatch(/the same|alike|identical/);
     // TRADE table: 16 assessors for pd 50 %, alpha 5 %, beta 20 % (ISO 4120 table A.3).
@@ -60,7 +60,7 @@ describe('a triangle session', () => {
     choose(tasting, 2, true);
     closeSession(scene.as('leader'), tasting.sessionId, 'two were enough for today');
     unsealSession(scene.as('leader'), tasting.sessionId);
-    const { triangle } = readResults(scene.as('winemaker'), tasting.sessionId);
+    const { choice: triangle } = readResults(scene.as('winemaker'), tasting.sessionId);
     expect(triangle).toMatchObject({ n: 2, correct: 1, unanswered: 4, minimumCorrect: null, isShown: false });
   });
 });

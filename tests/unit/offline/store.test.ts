@@ -13,10 +13,10 @@ import type { OutboxRow } from '@/lib/offline/types';
 import { randomUuid } from '@/lib/offline/uuid';
 
 const sheet = (seatLabel: string): Sheet => ({
-  protocol: 1, joinKey: 'abcdefghijklmnop', state: 'open', method: 'profile', title: 'T', instruction: 'I', seatLabel, seatRole: 'taste', commitment: 'a'.repeat(64),
+  protocol: 1, joinKey: 'abcdefghijklmnop', state: 'open', method: 'profile', ballot: { kind: 'glasses' }, title: 'T', instruction: 'I', seatLabel, seatRole: 'taste', commitment: 'a'.repeat(64),
   handoverKey: 'a'.repeat(64), restS: 0, servingVolumeMl: 30, allergens: [], blocks: [{ block: 1, glasses: [{ position: 1, code: '417' }, { position: 2, code: '523' }] }],
   items: [1, 2].map((item) => ({ item, phase: 'nose' as const, kind: 'line' as const, name: `L${item}`, definition: '', lowAnchor: 'none', highAnchor: 'very strong' })),
-  answers: { scores: [], faults: [], choices: [], comments: [] }, isSubmitted: false,
+  answers: { scores: [], faults: [], choices: [], orders: [], comments: [] }, isSubmitted: false,
 });
 
 const noMirror = (): Mirror => ({ read: () => [], write: () => true });

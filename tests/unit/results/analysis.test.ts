@@ -38,7 +38,7 @@ const tables = fc
 function analyse({ seats, samples, blocks, values }: Table, keep: (index: number) => boolean = () => true): ProfileView {
   const glasses = glassesFor(seats, samples, blocks);
   const scores = scoresOf(glasses, (_, index) => values[index]!).filter((_, index) => keep(index));
-  return analyseProfile({ lines: [LINE], scores, glasses, seats: seatFacts(seats), samples: sampleViews(samples).map((s) => s.sample), replicates: blocks, alpha: 0.05 });
+  return analyseProfile({ lines: [LINE], scores, glasses, seats: seatFacts(seats), samples: sampleViews(samples).map((s) => s.sample), replicates: blocks, alpha: 0.05, scale: { low: 0, high: 100 } });
 }
 
 const everyNumber = (value: unknown): number[] =>
@@ -80,7 +80,7 @@ describe('a profile line from any scores', () => {
         const turned = glasses.map((glass) => ({ ...glass, seatId: `seat${(Number(glass.seatId.slice(4)) % table.seats) + 1}` }));
         const value = (_: GlassFact, index: number) => table.values[index]!;
         const ask = (own: GlassFact[]) =>
-          analyseProfile({ lines: [LINE], scores: scoresOf(own, value).reverse(), glasses: own, seats: seatFacts(table.seats), samples: sampleViews(table.samples).map((s) => s.sample), replicates: table.blocks, alpha: 0.05 }).lines[0]!;
+          analyseProfile({ lines: [LINE], scores: scoresOf(own, value).reverse(), glasses: own, seats: seatFacts(table.seats), samples: sampleViews(table.samples).map((s) => s.sample), replicates: table.blocks, alpha: 0.05, scale: { low: 0, high: 100 } }).lines[0]!;
         const [a, b] = [ask(glasses), ask(turned)];
         a.cells.forEach((cell, i) => expect(cell.mean).toBeCloseTo(b.cells[i]!.mean, 9));
         if (a.product && b.product) expect(a.product.F / b.product.F).toBeCloseTo(1, 6);

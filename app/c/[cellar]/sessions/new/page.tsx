@@ -5,9 +5,10 @@ import { loadNewDesign } from '@/lib/sessions/loaders';
 
 export const metadata: Metadata = { title: 'Plan a session' };
 
-export default async function NewSessionPage({ params }: PageProps<'/c/[cellar]/sessions/new'>) {
+export default async function NewSessionPage({ params, searchParams }: PageProps<'/c/[cellar]/sessions/new'>) {
   const { cellar } = await params;
-  const { choices, defaults } = await loadNewDesign(cellar);
+  const { method } = await searchParams;
+  const { choices, defaults } = await loadNewDesign(cellar, typeof method === 'string' ? method : undefined);
   return (
     <LedgerPage>
       <LedgerHead margin="Session" title="Plan a session" />
