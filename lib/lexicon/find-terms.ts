@@ -85,9 +85,10 @@ function tokensOf(text: string, locale: Locale): Token[] {
 export function findTerms(text: string, terms: readonly Term[], locale: Locale): FoundTerm[] {
   const tokens = tokensOf(text, locale);
   const names = terms
-    .flatMap((term) => [term.name, ...(term.synonyms ?? [])].map((name) => ({ item: term.item, stems: [...name.matchAll(WORD)].map(([word]) => stemOf(word, locale)) })))
+    .flatMap((term) => [term.name, ...(term.synonyms ?? [])].map((name, i) => ({ item: term.item, isSynonym: i > 0, stems: [...name.matchAll(WORD)].map(([word]) => stemOf(word, locale)) })))
     .filter(({ stems }) => stems.length > 0)
-    .sort((a, b) => b.stems.length - a.stems.length);
+    // An entry's own name comes before another entry's synonym.
+    .sort((a, b) => b.stems.length - a.stems.length || Number(a.isSynonym) - Number(b.isSynonym));
   const byStem = new Map<string, typeof names>();
   for (const name of names) byStem.set(name.stems[0]!, [...(byStem.get(name.stems[0]!) ?? []), name]);
   const found = new Map<number, FoundTerm>();

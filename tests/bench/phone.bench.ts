@@ -18,7 +18,7 @@ const KILLS = Number(process.env.KILLS ?? 100);
 const SHEETS = Number(process.env.SHEETS ?? 200);
 /** Seats of the bench; with more sheets a seat is used again from a fresh phone. */
 const SEATS = 100;
-const WAIT_MS = 1_200_000;
+const WAIT_MS = Number(process.env.WAIT_S ?? 1_200) * 1_000;
 const AT_ONCE = 20;
 const FORTY = lexicon.filter((entry) => entry.sense === 'aroma').slice(0, 40).map((entry) => entry.id);
 
@@ -183,7 +183,10 @@ describe('the sheet on a phone', () => {
       for (let line = 0; line < 4; line += 1) await tapLine(page, line, 0.2 + 0.2 * line);
       // "received" may only be said with a receipt: the database is asked below. Three of five requests go
       // wrong, and the phone waits up to a minute between tries: in 1,000 sheets one waits for seven minutes.
-      for (let line = 0; line < 4; line += 1) await page.locator('.item').nth(line).locator('.state', { hasText: 'received' }).waitFor({ timeout: WAIT_MS });
+      for (let line = 0; line < 4; line += 1) {
+        const state = page.locator('.item').nth(line).locator('.state');
+        await state.filter({ hasText: 'received' }).waitFor({ timeout: WAIT_MS }).catch(async () => say(`sheet ${n}: line ${line + 1} still says "${await state.textContent()}" after ${WAIT_MS / 1000} s`));
+      }
       const ids = await page.evaluate(async () => {
         const request = indexedDB.open('tercet');
         const db = await new Promise<IDBDatabase>((resolve) => (request.onsuccess = () => resolve(request.result)));
