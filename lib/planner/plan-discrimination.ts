@@ -39,6 +39,8 @@ export interface DiscriminationPlan {
   /** What the panel at hand can do: `answers` that count, the chance, and the number correct that decides. */
   atHand: { answers: number; power: number; powerIfRepeatsSayNothing: number; critical: number | null };
   curve: CurvePoint[];
+  /** The curve in few rows, with the number correct that decides; the panel at hand and the smallest among them. */
+  table: (CurvePoint & { critical: number | null })[];
   /** What replicates do and do not buy, and how far the numbers reach. */
   notes: string[];
 }
@@ -66,6 +68,15 @@ function curveOf(q: DiscriminationQuestion, plan: PowerPlan, pd: number, end: nu
   const isDrawn = (n: number) => (end - n) % step === 0;
   if (q.aim === 'difference') return powerCurve(1, end, plan).filter(({ n }) => isDrawn(n)).map(({ n, power: size }) => ({ n, power: size }));
   return Array.from({ length: end }, (_, i) => i + 1).filter(isDrawn).map((n) => ({ n, power: chanceOfShowing(n, q, plan, pd) }));
+}
+
+/** About eight even steps of 1, 2 or 5 tens up to `end`, and the numbers that matter. */
+function rowsUpTo(end: number, more: readonly number[]): number[] {
+  const rough = end / 8;
+  const ten = 10 ** Math.floor(Math.log10(rough));
+  const step = Math.max(1, ([1, 2, 5].find((of) => of * ten >= rough) ?? 10) * ten);
+  const even = Array.from({ length: Math.floor(end / step) }, (_, i) => step * (i + 1));
+  return [...new Set([...even, ...more])].sort((a, b) => a - b);
 }
 
 function smallestOf(goal: number, plan: PowerPlan): DiscriminationPlan['smallest'] {
@@ -118,14 +129,16 @@ export function planDiscrimination(q: DiscriminationQuestion): DiscriminationPla
   const smallest = smallestOf(1 - q.beta, plan);
   const answers = answersOf(q, q.panel);
   const wanted = Math.max(CURVE.least, Math.ceil(1.3 * (smallest?.answers ?? CURVE.most)), Math.ceil(1.3 * answers));
-  const critical = q.aim === 'difference' ? minimumCorrect(answers, q.alpha, chance, { twoSided }) : similarityMaximum(answers, { beta: q.beta, pd: effect.pd, chance });
+  const end = Math.min(CURVE.most, wanted);
+  const criticalAt = (n: number) => (q.aim === 'difference' ? minimumCorrect(n, q.alpha, chance, { twoSided }) : similarityMaximum(n, { beta: q.beta, pd: effect.pd, chance }));
   const show = (n: number) => chanceOfShowing(n, q, plan, effect.pd);
   return {
     chance, effect, smallest,
     goal: q.aim === 'difference' ? 1 - q.beta : 1 - q.alpha,
     people: smallest && { hopeful: peopleFor(q, plan, smallest), safe: smallest.answers },
-    atHand: { answers, power: show(answers), powerIfRepeatsSayNothing: show(q.panel), critical },
-    curve: curveOf(q, plan, effect.pd, Math.min(CURVE.most, wanted)),
+    atHand: { answers, power: show(answers), powerIfRepeatsSayNothing: show(q.panel), critical: criticalAt(answers) },
+    curve: curveOf(q, plan, effect.pd, end),
+    table: rowsUpTo(end, [answers, ...(smallest ? [smallest.answers] : [])]).map((n) => ({ n, power: show(n), critical: criticalAt(n) })),
     notes: notesOf({ ...q, twoSided }, chance),
   };
 }

@@ -40,45 +40,70 @@ function powerAt(shift: number, critical: number, { at, weights }: ReturnType<ty
   return at.reduce((sum, scale, i) => sum + weights[i]! * (normalCdf(shift - critical * scale) + normalCdf(-shift - critical * scale)), 0);
 }
 
-function judge(q: ProfileQuestion): { ms: number; df: number; se: number; critical: number } {
-  const { panelists, samples, replicates, alpha, rule, scatter } = q;
+type Design = Omit<ProfileQuestion, 'scatter'>;
+
+/** What a design makes of any scatter: two differences in standard errors. */
+interface Reach {
+  df: number;
+  critical: number;
+  nodes: ReturnType<typeof errorNodes>;
+}
+
+function reachOf({ panelists, samples, alpha, rule }: Design): Reach {
   const df = (panelists - 1) * (samples - 1);
-  const ms = scatter.repeatability ** 2 + replicates * scatter.disagreement ** 2;
   const critical = rule === 'tukey' ? studentizedRangeQuantile(1 - alpha, samples, df) / Math.SQRT2 : tQuantile(1 - alpha / 2, df);
-  return { ms, df, se: Math.sqrt((2 * ms) / (panelists * replicates)), critical };
+  return { df, critical, nodes: errorNodes(df) };
+}
+
+/** The expected mean square of panelist × sample, and the standard error of a difference of two means. */
+function errorOf({ panelists, replicates }: Design, { repeatability, disagreement }: Scatter): { ms: number; se: number } {
+  const ms = repeatability ** 2 + replicates * disagreement ** 2;
+  return { ms, se: Math.sqrt((2 * ms) / (panelists * replicates)) };
+}
+
+/** The true difference, in standard errors, that is shown with chance `goal`. */
+function shiftFor(goal: number, { critical, nodes }: Reach): number {
+  let [low, high] = [0, critical + 1];
+  while (powerAt(high, critical, nodes) < goal) high *= 1.5;
+  for (let i = 0; i < 50; i += 1) {
+    const middle = (low + high) / 2;
+    if (powerAt(middle, critical, nodes) < goal) low = middle;
+    else high = middle;
+  }
+  return high;
 }
 
 /**
  * The chance that a true difference (points of the scale) between two samples' means is shown.
  * @throws StatsError on fewer than two panelists or samples, alpha out of range
  */
-export function profilePower(q: ProfileQuestion, difference: number): number {
-  const { df, se, critical } = judge(q);
+export function profilePower({ scatter, ...design }: ProfileQuestion, difference: number): number {
+  const { critical, nodes } = reachOf(design);
+  const { se } = errorOf(design, scatter);
   if (se === 0) return difference === 0 ? 0 : 1;
-  return powerAt(Math.abs(difference) / se, critical, errorNodes(df));
+  return powerAt(Math.abs(difference) / se, critical, nodes);
 }
 
 /**
- * The smallest difference that a profile shows, and the true one that it finds with chance `goal`.
+ * For each scatter (a line of the ballot) the smallest difference that a profile shows, and the true
+ * one that it finds with chance `goal`.
  * Model of the results: panelists random, samples judged by the panelist × sample mean square, which is
  * expected to be repeatability² + replicates · disagreement² on (I − 1)(J − 1) degrees of freedom.
  * Tukey: q(1 − α; J, df) √(ms / (I r)); LSD: t(1 − α/2; df) √(2 ms / (I r)).
  * Units: points of the scale. `goal` in (0, 1), above alpha. Relative error of `found` below 1e-4.
  * @throws StatsError on fewer than two panelists or samples, alpha out of range
  */
-export function planProfile(q: ProfileQuestion, goal = 0.8): ProfilePlan {
-  const { ms, df, se, critical } = judge(q);
-  if (se === 0) return { shown: 0, found: 0, ms, df };
-  const nodes = errorNodes(df);
-  let [low, high] = [0, critical + 1];
-  while (powerAt(high, critical, nodes) < goal) high *= 1.5;
-  for (let i = 0; i < 60; i += 1) {
-    const middle = (low + high) / 2;
-    if (powerAt(middle, critical, nodes) < goal) low = middle;
-    else high = middle;
-  }
-  return { shown: critical * se, found: high * se, ms, df };
+export function planProfiles(scatters: readonly Scatter[], design: Design, goal = 0.8): ProfilePlan[] {
+  const reach = reachOf(design);
+  const shift = shiftFor(goal, reach);
+  return scatters.map((scatter) => {
+    const { ms, se } = errorOf(design, scatter);
+    return { shown: reach.critical * se, found: shift * se, ms, df: reach.df };
+  });
 }
+
+/** The same for one scatter. */
+export const planProfile = ({ scatter, ...design }: ProfileQuestion, goal = 0.8): ProfilePlan => planProfiles([scatter], design, goal)[0]!;
 
 /** What one line of a past session showed of its panel. */
 export interface PastLine {
