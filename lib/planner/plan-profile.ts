@@ -115,7 +115,7 @@ export interface PastLine {
   alpha: number;
   /** Tukey's smallest difference of that session, points of the scale. */
   smallestDifference: number;
-  /** F of the interaction over the error; null with one replicate. */
+  /** F of the interaction over the error; null with one replicate, or without any error. */
   interactionF: number | null;
 }
 
@@ -135,7 +135,7 @@ export function scatterOfLine(line: PastLine): LineScatter {
   const { panelists, samples, replicates, alpha, smallestDifference, interactionF, name } = line;
   const df = (panelists - 1) * (samples - 1);
   const msInteraction = panelists * replicates * (smallestDifference / studentizedRangeQuantile(1 - alpha, samples, df)) ** 2;
-  if (interactionF === null || interactionF === 0) return { name, df, repeatability: 0, disagreement: Math.sqrt(msInteraction) };
+  if (interactionF === null || interactionF === 0) return { name, df, repeatability: 0, disagreement: Math.sqrt(msInteraction / replicates) };
   const msError = msInteraction / interactionF;
   return { name, df, repeatability: Math.sqrt(msError), disagreement: Math.sqrt(Math.max(0, (msInteraction - msError) / replicates)) };
 }

@@ -1,6 +1,6 @@
 import 'server-only';
 import { getDb } from '@/db/client';
-import { SESSION_STATES } from '@/db/enums';
+import { METHODS, SESSION_STATES } from '@/db/enums';
 import { earlyOpenings, operations, seals, users } from '@/db/schema';
 import { and, asc, count, eq } from 'drizzle-orm';
 import encodeQR from 'qr';
@@ -143,10 +143,11 @@ const NEW_SESSION = {
   instruction: 'Taste each glass by itself, in the order of the sheet. Spit, rinse and wait between glasses.',
 };
 
-/** The empty form of a new session. */
-export async function loadNewDesign(slug: string) {
+/** The empty form of a new session. `wanted`: the method it begins with, when it is one. */
+export async function loadNewDesign(slug: string, wanted?: unknown) {
   const access = await loadAccess(slug, 'session.design');
-  return { access, choices: designChoices(access, []), defaults: { ...NEW_SESSION, leaderId: access.user.id } as Record<string, unknown> };
+  const method = METHODS.find((candidate) => candidate === wanted) ?? NEW_SESSION.method;
+  return { access, choices: designChoices(access, []), defaults: { ...NEW_SESSION, method, leaderId: access.user.id } as Record<string, unknown> };
 }
 
 /** The form of a draft; null once it is sealed. */

@@ -5,9 +5,9 @@ import { loadNewDesign } from '@/lib/sessions/loaders';
 
 export const metadata: Metadata = { title: 'Plan a session' };
 
-export default async function NewSessionPage({ params }: PageProps<'/c/[cellar]/sessions/new'>) {
+export default async function NewSessionPage({ params, searchParams }: PageProps<'/c/[cellar]/sessions/new'>) {
   const { cellar } = await params;
-  const { choices, defaults } = await loadNewDesign(cellar);
+  const { choices, defaults } = await loadNewDesign(cellar, (await searchParams).method);
   return (
     <LedgerPage>
       <LedgerHead margin="Session" title="Plan a session" />
