@@ -23,9 +23,12 @@ function Remarks({ texts }: { texts: readonly string[] }) {
   return texts.map((text) => <span key={text} className="note" style={{ display: 'block' }}>{text}</span>);
 }
 
-const aboutOffer = (offer: Offer) => <>{offer.why}<Remarks texts={[`Panelists ${offer.basis}.`, ...offer.cautions]} /></>;
+/** Counted panels all say the same of themselves, once, under the tables. */
+const basisOf = (offer: Offer): string[] => (offer.isCounted ? [] : [`Panelists: ${offer.basis}.`]);
+
+const aboutOffer = (offer: Offer) => <>{offer.why}<Remarks texts={[...basisOf(offer), ...offer.cautions]} /></>;
 const aboutMisfit = (misfit: Misfit) => (
-  <>{misfit.reasons.map((reason) => <span key={reason} className="warn" style={{ display: 'block' }}>{reason}</span>)}<Remarks texts={[misfit.why, `Panelists ${misfit.basis}.`]} /></>
+  <>{misfit.reasons.map((reason) => <span key={reason} className="warn" style={{ display: 'block' }}>{reason}</span>)}<Remarks texts={[misfit.why, ...basisOf(misfit)]} /></>
 );
 
 /** Address of the panel planner with an offered test in it; null for methods that it doesn't plan. */
@@ -49,11 +52,21 @@ function Found({ home, query, choosing }: { home: string; query: Query; choosing
     planHref: (offer: Offer) => planHrefOf(offer, query, choosing),
   };
   const n = offers.length;
+  const counted = [...offers, ...misfits].find((offer) => offer.isCounted);
   return (
     <>
       <p className="verdict">{n === 0 ? 'As asked, nothing fits. What stands in the way is said below.' : <>{n === 1 ? 'One method fits' : `${n} methods fit`}; <b>{offers[0]!.name.toLowerCase()}</b> first.</>}</p>
       {n > 0 && <Offers offers={offers} caption="For the usual panel, and in brackets for the fewest that are worth while. Wine with one spare glass." choose="Design it" about={aboutOffer} {...links} />}
-      {misfits.length > 0 && <Offers offers={misfits} caption="Would answer it, and doesn’t fit what is at hand. You decide." choose="Design it all the same" about={aboutMisfit} {...links} />}
+      {misfits.length > 0 && (
+        <details open={n === 0 || undefined}>
+          <summary className="link">{n === 0 ? 'Methods that' : `${misfits.length} more`} would answer it, and {misfits.length === 1 && n > 0 ? 'doesn’t' : 'don’t'} fit what is at hand</summary>
+          <div className="pt-3"><Offers offers={misfits} caption="You decide: each may be taken all the same." choose="Design it all the same" about={aboutMisfit} {...links} /></div>
+        </details>
+      )}
+      <div className="stack tight note" style={{ maxWidth: '90ch' }}>
+        {counted && <p>Panelists of a test are {counted.basis}.</p>}
+        {choosing.people !== null && <p>Counted for {people(choosing.people)} who can taste.</p>}
+      </div>
     </>
   );
 }
@@ -88,7 +101,6 @@ export function Chooser({ home, query: initial, kept }: Props) {
       <div ref={answer} tabIndex={-1} className="stack wide-gap" aria-label="What fits" role="region">
         <WrongFields form={form} />
         {read.ok && <Found home={home} query={query} choosing={read.value} />}
-        {read.ok && read.value.people !== null && <p className="note">Counted for {people(read.value.people)} who can taste.</p>}
       </div>
     </div>
   );

@@ -25,8 +25,8 @@ function Pair({ of: { usual, fewest }, show = amount }: { of: { usual: number; f
 /** Methods with what each needs: for the usual panel, and in brackets for the fewest. */
 export function Offers<T extends Offer>({ offers, caption, designHref, planHref, choose, about }: Props<T>) {
   return (
-    <table className="ledger folds">
-      <caption>{caption}</caption>
+    <table className="ledger folds tight">
+      <caption className="max-md:block">{caption}</caption>
       <thead>
         <tr>
           <th scope="col">Method</th><th scope="col" className="num">Panelists</th><th scope="col" className="num">Glasses each</th><th scope="col" className="num">Glasses in all</th>

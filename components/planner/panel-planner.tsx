@@ -29,7 +29,7 @@ function Table({ plan, isDifference }: { plan: DiscriminationPlan; isDifference:
           <tr key={n} className={mark(n) ? 'sel' : undefined}>
             <th scope="row" className="num n">{n.toLocaleString('en')}</th>
             <td className="num n">{critical ?? 'none'}</td>
-            <td className="num n">{showChance(power)}</td>
+            <td className="num n">{showChance(power, 1)}</td>
             <td>{mark(n)}</td>
           </tr>
         ))}

@@ -37,8 +37,8 @@ type Row = Scatter & { name: string; sessions?: number };
 function Rows({ rows, q, caption }: { rows: readonly Row[]; q: ProfileQuestion; caption: string }) {
   const plans = planProfiles(rows, q);
   return (
-    <table className="ledger folds">
-      <caption>{caption}</caption>
+    <table className="ledger folds tight">
+      <caption className="max-md:block">{caption}</caption>
       <thead>
         <tr><th scope="col">Line</th><th scope="col" className="num">Repeats scatter by</th><th scope="col" className="num">Panelists disagree by</th><th scope="col" className="num">Shown from</th><th scope="col" className="num n">Found 8 times in 10 from</th><th scope="col">From</th></tr>
       </thead>

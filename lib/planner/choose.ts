@@ -136,7 +136,7 @@ export function choose(choosing: Choosing): Choice {
   for (const method of candidates(choosing)) {
     const facts = METHOD_FACTS[method];
     const needs = needsOf(facts, panelOf(facts, choosing), choosing);
-    const offer = { method, name: facts.name, why: facts.why, needs, basis: basisOf(facts, choosing), cautions: cautionsOf(method, needs, choosing) };
+    const offer = { method, name: facts.name, why: facts.why, needs, basis: basisOf(facts, choosing), isCounted: facts.practice === null, cautions: cautionsOf(method, needs, choosing) };
     const reasons = [countReason(facts, choosing.samples), wineReason(method, needs, choosing), peopleReason(needs, choosing.people)].filter((reason) => reason !== null);
     if (reasons.length === 0) choice.offers.push(offer);
     else choice.misfits.push({ ...offer, reasons } satisfies Misfit);

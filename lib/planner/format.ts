@@ -20,11 +20,11 @@ export const PROTOCOL_WORDS: Record<PlannedProtocol, string> = {
   triangle: 'Triangle', tetrad: 'Tetrad', duo_trio: 'Duo-trio', two_afc: 'Pair: direction or preference', two_out_of_five: 'Two out of five',
 };
 
-/** A chance in whole percent; never 0 or 100 of what is not certain. */
-export function showChance(p: number): string {
-  const percent = Math.round(100 * p);
-  if (p > 0 && percent === 0) return 'under 1 %';
-  return p < 1 && percent === 100 ? 'over 99 %' : `${percent} %`;
+/** A chance in percent, whole or with `digits`; never 0 or 100 of what is not certain. */
+export function showChance(p: number, digits = 0): string {
+  const percent = (100 * p).toFixed(digits);
+  if (p > 0 && Number(percent) === 0) return `under ${10 ** -digits} %`;
+  return p < 1 && Number(percent) === 100 ? `over ${(100 - 10 ** -digits).toFixed(digits)} %` : `${percent} %`;
 }
 
 export const people = (n: number): string => `${n.toLocaleString('en')} ${n === 1 ? 'person' : 'people'}`;

@@ -55,8 +55,9 @@ export interface Offer {
   /** One sentence: why it fits. */
   why: string;
   needs: Needs;
-  /** Where the number of panelists comes from. */
+  /** Where the number of panelists comes from: a power calculation, or practice. */
   basis: string;
+  isCounted: boolean;
   /** What to know before choosing it. */
   cautions: string[];
 }

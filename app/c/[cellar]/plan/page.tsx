@@ -24,7 +24,7 @@ export default async function PlanPage({ params, searchParams }: PageProps<'/c/[
   const keyOf = (own: object) => JSON.stringify(own);
   return (
     <LedgerPage>
-      <LedgerHead margin="Sessions" title="Plan a test" actions={<Link className="btn" href={`${home}/sessions/new`}>Straight to the design</Link>} />
+      <LedgerHead margin="Sessions" title="Plan a test" actions={<><a className="btn btn-bare" href="#panel-of-a-test">Panel of a test</a><a className="btn btn-bare" href="#panel-of-a-profile">Panel of a profile</a><Link className="btn" href={`${home}/sessions/new`}>Straight to the design</Link></>} />
       <LedgerRow question="Which method?" note="Answer in plain words. The choice stays yours.">
         <Chooser key={keyOf(choosing)} home={home} query={questions} kept={choosing.others} />
       </LedgerRow>
