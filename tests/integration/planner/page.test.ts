@@ -1,3 +1,5 @@
+import { readFileSync } from 'node:fs';
+import path from 'node:path';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { readDemo, signInOf, type DemoFile } from '../../support/demo';
 import { Client } from '../../support/http';
@@ -57,8 +59,20 @@ describe('the page to plan a test, without JavaScript', () => {
     expect(new URL((await panelist.get(`${home}/plan`)).url).pathname).toBe(`${home}/not-allowed`);
   });
 
-  it('is not found in a foreign cellar', async () => {
-    expect((await owner.get('/c/no-cellar-of-mine/plan')).status).toBe(404);
-    expect(new URL((await new Client(server.url).get(`${home}/plan`)).url).pathname).toBe('/sign-in');
+  it('shows a new cellar a range in place of its own figures, and is not found by strangers to it', async () => {
+    const { path: link } = JSON.parse(readFileSync(path.join(server.folder, 'first-owner.json'), 'utf8')) as { path: string };
+    const newcomer = new Client(server.url);
+    const fields = { cellarName: 'Own Cellar', drink: 'cider', timeZone: 'Europe/Madrid', name: 'Owen', email: 'owen@example.com', password: 'apples under the ladder' };
+    await newcomer.submitForm(await newcomer.get(link), 'Make the cellar', fields);
+    const page = await newcomer.get('/c/own-cellar/plan');
+    expect(page.status).toBe(200);
+    expect(page.text).toContain('No profile has been unsealed yet');
+    expect(page.text).toContain('A range to choose from');
+    expect(page.text).toContain('As asked, nothing fits.');
+    const foreign = await owner.get('/c/own-cellar/plan');
+    const missing = await owner.get('/c/no-cellar-at-all/plan');
+    expect([foreign.status, missing.status]).toEqual([404, 404]);
+    expect(foreign.text).toBe(missing.text);
+    expect(new URL((await new Client(server.url).get('/c/own-cellar/plan')).url).pathname).toBe('/sign-in');
   });
 });
