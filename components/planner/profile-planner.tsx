@@ -19,14 +19,14 @@ interface Props {
   kept: Query;
   panel: number;
   /** null: the person may not see results. */
-  past: { lines: readonly KnownLine[]; sessions: number } | null;
+  past: { lines: readonly KnownLine[]; sessions: number; leftOut: number } | null;
 }
 
 /** Where nothing is known of the panel: a range to choose from. Ours; no standard gives such figures. */
 const STARTS: readonly (Scatter & { name: string })[] = [
   { name: 'A steady panel', repeatability: 5, disagreement: 3 },
   { name: 'A panel in training', repeatability: 10, disagreement: 7 },
-  { name: 'Loose', repeatability: 15, disagreement: 12 },
+  { name: 'A loose panel', repeatability: 15, disagreement: 12 },
 ];
 
 /** More lines than this go under a fold. */
@@ -70,6 +70,7 @@ function PastRows({ past, q }: { past: NonNullable<Props['past']>; q: ProfileQue
           <div className="pt-3"><Rows rows={rest} q={q} caption="The other lines" /></div>
         </details>
       )}
+      {past.leftOut > 0 && <p className="note">Left out: {past.leftOut === 1 ? 'one line that has' : `${past.leftOut} lines that have`} gaps or could not be tested.</p>}
     </>
   );
 }
@@ -78,7 +79,7 @@ function PastRows({ past, q }: { past: NonNullable<Props['past']>; q: ProfileQue
 function nothingKnown(past: Props['past']): string | null {
   if (!past) return 'Results of past sessions are not for your roles to see, so the range below has to do.';
   if (past.sessions === 0) return 'No profile has been unsealed yet, so nothing is known of this panel. After the first one its own figures stand here. Until then, choose from the range.';
-  return past.lines.length === 0 ? 'The profiles so far have gaps in every line, so the panel’s scatter can’t be told from them. Choose from the range.' : null;
+  return past.lines.length === 0 ? 'The profiles so far have gaps in every line or could not be tested, so the panel’s scatter can’t be told from them. Choose from the range.' : null;
 }
 
 /** The planner of a profile: how far two means must lie apart, by line, for a panel and design. */
@@ -111,7 +112,7 @@ export function ProfilePlanner({ query: initial, kept, panel, past }: Props) {
         <p className="note" style={{ maxWidth: '90ch' }}>
           Means are judged by the panelist × sample mean square, as in the results: repeatability² + times × disagreement². “Shown from”: means further apart are called different
           {q?.rule === 'lsd' ? ' by a t test of that pair alone; with many pairs false differences add up' : ' by Tukey’s rule, which guards all pairs together'}. “Found 8 times in 10”: the true difference that such a panel shows with a chance of 80 %.
-          {' '}More tastings by the same people narrow their own scatter only; what they disagree in is narrowed by more people.
+          {' '}More tastings by the same people narrow their own scatter only; what they disagree in is narrowed by more people. Past figures hold as far as the same kind of people taste the same kind of wine.
         </p>
       </div>
     </div>

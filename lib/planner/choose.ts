@@ -115,7 +115,7 @@ function cautionsOf(method: OfferedMethod, needs: Needs, choosing: Choosing): st
   const reach = choosing.wineMl === null ? Infinity : reachOf(method, choosing.wineMl, choosing.servingMl);
   const at = Math.min(choosing.people ?? Infinity, reach);
   const cautions: string[] = [];
-  if (reach < usual && reach >= fewest) cautions.push(`The wine reaches for ${reach} people, not for the usual ${usual}.`);
+  if (reach < usual && reach >= fewest && reach === at) cautions.push(`The wine reaches for ${reach} people, not for the usual ${usual}.`);
   if (at < usual && at > 0) cautions.push(`${at} ${at === 1 ? 'person is' : 'people are'} fewer than the usual ${usual}.${showing(facts, at, choosing)}`);
   const limit = choosing.isStrong ? FLIGHT.strong : FLIGHT.light;
   if (!facts.orders && choosing.samples > limit) cautions.push(`${choosing.samples} glasses at once are too many for ${choosing.isStrong ? 'such' : 'a'} wine: ${needs.flights} flights with ${BREAK_MIN} minutes between them (common practice).`);

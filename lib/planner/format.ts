@@ -44,7 +44,9 @@ export function headlineOf(plan: DiscriminationPlan, q: DiscriminationQuestion):
 export function sentencesOf(plan: DiscriminationPlan, q: DiscriminationQuestion): string[] {
   const { answers, power, powerIfRepeatsSayNothing, critical } = plan.atHand;
   const who = `Your ${people(q.panel)}`;
-  const chance = answers === q.panel ? showChance(power) : `${showChance(powerIfRepeatsSayNothing)} to ${showChance(power)}`;
+  // Exact power is saw-toothed: more answers may, seldom, find a little less.
+  const [low, high] = [power, powerIfRepeatsSayNothing].sort((a, b) => a - b).map((p) => showChance(p));
+  const chance = low === high ? low! : `${low} to ${high}`;
   const sentences = q.aim === 'difference'
     ? [`${who} would show a difference of that size with a chance of ${chance}; the goal is ${showChance(plan.goal)}.`]
     : [`If nobody tastes a difference, your ${people(q.panel)} would show likeness with a chance of ${chance}; the goal is ${showChance(plan.goal)}.`];

@@ -19,7 +19,12 @@ export interface PlannerFacts {
   /** People that plans begin with. */
   panel: number;
   /** Scatter by line of the ballot from past sessions; null for those who may not see results. */
-  past: { lines: ReturnType<typeof poolScatter>; sessions: number } | null;
+  past: {
+    lines: ReturnType<typeof poolScatter>;
+    sessions: number;
+    /** Lines of those sessions with gaps or without a test. */
+    leftOut: number;
+  } | null;
 }
 
 /** A panel that plans begin with where a cellar has nobody yet. */
@@ -48,7 +53,9 @@ export function readPlannerFacts(access: Access): PlannerFacts {
   const facts = { members, ballots, panel: ballots || members || NOBODY_YET };
   if (!allows(access.roles, 'results.view')) return { ...facts, past: null };
   const profiles = listPastProfiles(db, id, LOOK_BACK).flatMap((sessionId) => readResults(access, sessionId).profile ?? []);
-  return { ...facts, past: { lines: poolScatter(profiles.flatMap(scattersOf)), sessions: profiles.length } };
+  const scatters = profiles.flatMap(scattersOf);
+  const scored = profiles.reduce((sum, profile) => sum + profile.lines.length, 0);
+  return { ...facts, past: { lines: poolScatter(scatters), sessions: profiles.length, leftOut: scored - scatters.length } };
 }
 
 /** For the page: access and facts; strangers find nothing there. */

@@ -34,7 +34,7 @@ export interface DiscriminationPlan {
   goal: number;
   /** Smallest numbers of answers; null when more than a million would be needed. */
   smallest: { answers: number; power: number; steadyFrom: number } | null;
-  /** Smallest numbers of people: if every set were an own palate's, and if repeats told nothing new. Equal with one set. */
+  /** Smallest numbers of people: if every set were a new palate's, and with each person counted once. Equal with one set; a guide, no limits. */
   people: { hopeful: number; safe: number } | null;
   /** What the panel at hand can do: `answers` that count, the chance, and the number correct that decides. */
   atHand: { answers: number; power: number; powerIfRepeatsSayNothing: number; critical: number | null };
@@ -100,7 +100,7 @@ function peopleFor(q: DiscriminationQuestion, plan: PowerPlan, smallest: NonNull
 function notesOf(q: DiscriminationQuestion, chance: number): string[] {
   const notes: string[] = [];
   if (q.replicates > 1 && q.aim === 'difference') {
-    notes.push(`${q.replicates} sets from each person: the test of a difference stays valid, because under guessing every answer is as good as another’s. But one person’s answers are not independent: if people differ in what they taste, the true chance lies between the two that are given. Sets tell whether a palate repeats itself; they don’t tell more about other people.`);
+    notes.push(`${q.replicates} sets from each person: the test of a difference stays valid, because under guessing every answer is as good as another’s. But one person’s answers are not independent. One figure takes every set for a new palate’s, which is hopeful; the other counts each person once, which is careful. The truth depends on how much people differ; the two are a guide, no limits. Sets tell whether a palate repeats itself; they don’t tell more about other people.`);
   }
   if (q.replicates > 1 && q.aim === 'similarity') {
     notes.push('A claim of likeness counts one answer for each person: repeats by the same palate would make it look surer than it is (ISO 10399, note to 6.2, by analogy). The further sets are not counted here.');

@@ -25,9 +25,9 @@ beforeAll(() => {
 
 describe('what the planner knows of the panel', () => {
   it('is nothing before a profile is unsealed, and then its own mean squares', () => {
-    expect(readPlannerFacts(scene.as('owner'))).toEqual({ members: 5, ballots: 0, panel: 5, past: { lines: [], sessions: 0 } });
+    expect(readPlannerFacts(scene.as('owner'))).toEqual({ members: 5, ballots: 0, panel: 5, past: { lines: [], sessions: 0, leftOut: 0 } });
     const sessionId = tasteAndClose();
-    expect(readPlannerFacts(scene.as('leader')).past).toEqual({ lines: [], sessions: 0 });
+    expect(readPlannerFacts(scene.as('leader')).past).toEqual({ lines: [], sessions: 0, leftOut: 0 });
     unsealSession(scene.as('leader'), sessionId);
 
     const { past, panel, ballots } = readPlannerFacts(scene.as('leader'));
@@ -41,7 +41,7 @@ describe('what the planner knows of the panel', () => {
   });
 
   it('never comes from another cellar, nor to those who design nothing', () => {
-    expect(readPlannerFacts(other.as('winemaker'))).toMatchObject({ ballots: 0, past: { lines: [], sessions: 0 } });
+    expect(readPlannerFacts(other.as('winemaker'))).toMatchObject({ ballots: 0, past: { lines: [], sessions: 0, leftOut: 0 } });
     for (const role of ['cellar_hand', 'panelist'] as const) expect(() => readPlannerFacts(scene.as(role))).toThrow(expect.objectContaining({ code: 'forbidden' }));
   });
 });
