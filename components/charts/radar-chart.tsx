@@ -1,9 +1,9 @@
 'use client';
 
 import { Chart as ChartJs, Filler, LineElement, PointElement, RadialLinearScale, type ChartOptions, type PointStyle } from 'chart.js';
-import { useSyncExternalStore } from 'react';
 import { Radar } from 'react-chartjs-2';
 import type { ScaleView } from '@/lib/results/types';
+import { useCanvas } from './canvas';
 import { stepOf } from './interval-plot';
 import type { SampleStyle, Shape } from './styles';
 
@@ -17,21 +17,6 @@ export interface RadarSeries {
 }
 
 const POINTS: Record<Shape, PointStyle> = { circle: 'circle', square: 'rect', triangle: 'triangle', diamond: 'rectRot', cross: 'crossRot', bar: 'dash' };
-
-/** Tells when the light of the screen changes, so that the canvas takes the other colours. */
-function subscribeMode(onChange: () => void): () => void {
-  const observer = new MutationObserver(onChange);
-  observer.observe(document.documentElement, { attributes: true, attributeFilter: ['data-mode'] });
-  return () => observer.disconnect();
-}
-
-const readMode = () => document.documentElement.dataset.mode ?? 'paper';
-
-/** Values of tokens in the present light: a canvas can't take `var()`. */
-function tokenReader(): (name: string) => string {
-  const computed = getComputedStyle(document.documentElement);
-  return (name) => computed.getPropertyValue(name).trim();
-}
 
 /** Breaks a long name into lines of at most two words. */
 const inLines = (name: string): string | string[] => {
@@ -47,9 +32,7 @@ const topOf = (series: readonly RadarSeries[], ends: ScaleView) => {
 
 /** Mean profiles on a radar. Drawn in the browser only; the table beside holds the same numbers. */
 export default function RadarChart({ axes, series, scale }: { axes: string[]; series: RadarSeries[]; scale: ScaleView }) {
-  const mode = useSyncExternalStore(subscribeMode, readMode, () => 'paper');
-  const token = tokenReader();
-  const font = { family: getComputedStyle(document.body).fontFamily, size: 13 };
+  const { mode, token, font } = useCanvas();
   const options: ChartOptions<'radar'> = {
     animation: false,
     maintainAspectRatio: false,

@@ -36,7 +36,7 @@ const DESK: Record<string, (open: (list: string, name: string) => Promise<string
   },
   'sessions before they close': async (open) => {
     const [board, draft, profile] = [await open('sessions', 'Open tasting'), await open('sessions', 'Next tasting'), await open('sessions', 'Wednesday tasting')];
-    return [CELLAR, `${CELLAR}/sessions`, board, `${board}/pour`, `${board}/handover`, draft, `${draft}/design`, profile];
+    return [CELLAR, `${CELLAR}/sessions`, `${CELLAR}/plan`, board, `${board}/pour`, `${board}/handover`, draft, `${draft}/design`, profile];
   },
   'results, calls and settings': async (open) => [
     `${await open('sessions', 'Wednesday tasting')}/results`, `${await open('sessions', 'Thursday tasting')}/results`,

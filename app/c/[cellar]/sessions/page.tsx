@@ -20,7 +20,7 @@ export default async function SessionsPage({ params, searchParams }: PageProps<'
   const mayDesign = allows(access.roles, 'session.design');
   return (
     <LedgerPage>
-      <LedgerHead margin="Sessions" title="What was tasted, and what comes" actions={mayDesign && <Link className="btn btn-main" href={`${base}/new`}>Plan a session</Link>} />
+      <LedgerHead margin="Sessions" title="What was tasted, and what comes" actions={mayDesign && <><Link className="btn" href={`/c/${cellar}/plan`}>Plan a test</Link><Link className="btn btn-main" href={`${base}/new`}>Plan a session</Link></>} />
       <LedgerRow question="Which session?">
         <form className="toolbar" role="search">
           <input className="input" type="search" name="q" defaultValue={query} placeholder="Title or leader" aria-label="Title or leader" />
