@@ -3,6 +3,7 @@ import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { uniformInt } from 'pure-rand/distribution/uniformInt';
 import type { Page } from '@playwright/test';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { PHASES } from '@/db/enums';
 import lexicon from '@/lib/lexicon/lexicon.json';
 import { startServer, type TestServer } from '../support/server';
 import { buildBareApp } from './bare-app';
@@ -57,7 +58,7 @@ async function tapLine(page: Page, n: number, share: number): Promise<void> {
   await page.mouse.click(box.x + box.width * share, box.y + box.height / 2);
 }
 
-const TAPS = 40;
+const TAPS = 100;
 
 /** Milliseconds from finger to paint with the CPU slowed down 6 times, tap after tap on the page's lines. */
 async function tapsToPaint(page: Page): Promise<number[]> {
@@ -73,7 +74,7 @@ async function tapsToPaint(page: Page): Promise<number[]> {
     const box = await boxOf(page, n % lines);
     // A thumb taps after the page has come to rest: the scroll's own frames are not the tap's.
     await page.waitForTimeout(250);
-    await page.touchscreen.tap(box.x + box.width * (0.1 + 0.02 * n), box.y + box.height / 2);
+    await page.touchscreen.tap(box.x + box.width * (0.1 + 0.008 * n), box.y + box.height / 2);
     await page.waitForTimeout(350);
   }
   const durations = await page.evaluate(() => (window as unknown as { seen: number[] }).seen);
@@ -103,7 +104,14 @@ describe('the sheet on a phone', () => {
     await page.goto(sheetUrl(server.url), { waitUntil: 'networkidle' });
     expect(await page.getByRole('slider').count()).toBe(40);
     const sheet = await tapsToPaint(page);
-    say(`tap to paint, 40 lines, CPU slowed 6 times, ${TAPS} taps: ${told(sheet)} (goal 50)`);
+    say(`tap to paint, 40 lines on one page, CPU slowed 6 times, ${TAPS} taps: ${told(sheet)} (goal 50)`);
+    const parted = await makeBenchScene(1, FORTY, PHASES);
+    const other = await startServer({ folder: parted.folder });
+    await context.addCookies(asCookies(parted.cookies[0]!, other.url));
+    await page.goto(`${other.url}/t/${parted.joinKey}`, { waitUntil: 'networkidle' });
+    expect(await page.getByRole('slider').count()).toBe(8);
+    say(`tap to paint, 40 lines in five parts as a glass is tasted: ${told(await tapsToPaint(page))} (goal 50)`);
+    await other.stop('SIGKILL');
     // What this machine takes for a page of one box that moves when it is touched, without any framework.
     await page.goto(`${server.url}/api/health`);
     await page.setContent('<div role="slider" style="height:600px;background:#eee"><div style="width:9px;height:9px;background:#000"></div></div>');

@@ -3,6 +3,7 @@ import path from 'node:path';
 import { asc, eq } from 'drizzle-orm';
 import { sealData } from 'iron-session';
 import { closeDb, openDatabase } from '@/db/client';
+import type { Phase } from '@/db/enums';
 import { fills, lots, pulls, seats, sessions, vessels } from '@/db/schema';
 import { accessOf } from '@/lib/auth/access';
 import { insertPeople } from '@/lib/demo/cellar';
@@ -28,8 +29,11 @@ export interface BenchScene {
   countKept(opIds: readonly string[]): number;
 }
 
-/** An open profile session with that many seats taken, on a database of its own. `lines`: keys of the lexicon, all on the nose. */
-export async function makeBenchScene(seatCount: number, lines: readonly string[] = LINES): Promise<BenchScene> {
+/**
+ * An open profile session with that many seats taken, on a database of its own. `lines`: keys of the lexicon, all on
+ * the nose, or dealt out over the parts of a tasting.
+ */
+export async function makeBenchScene(seatCount: number, lines: readonly string[] = LINES, phases: readonly Phase[] = ['nose']): Promise<BenchScene> {
   const db = testDb();
   const at = new Date();
   const hashes = Object.fromEntries(PEOPLE.map((person) => [person.key, 'no sign-in'])) as Record<DemoPerson['key'], string>;
@@ -44,7 +48,7 @@ export async function makeBenchScene(seatCount: number, lines: readonly string[]
     return { label: `Barrel ${i + 1}`, pullId };
   });
   const sessionId = db.transaction((tx) => insertDraft(tx, cellarId, userIds.odo, userIds.bram, {
-    method: 'profile', title: 'Bench', instruction: 'Bench', privateQuestion: 'Bench?', samples, lines: lines.map((key) => ({ key, phase: 'nose' as const })), flags: [],
+    method: 'profile', title: 'Bench', instruction: 'Bench', privateQuestion: 'Bench?', samples, lines: lines.map((key, i) => ({ key, phase: phases[i % phases.length]! })), flags: [],
     seats: seatCount, reserves: 0, replicates: 1, servingTemperatureC: 16, allergens: [], scheduledFor: at, createdAt: at,
   }));
   const leader = accessOf({ id: userIds.odo, email: '', name: '', signInId: '' }, ESTATE.slug)!;
