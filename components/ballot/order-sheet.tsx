@@ -42,7 +42,7 @@ export function OrderSheet({ sheet, store, state, place, go }: SheetPart) {
     <>
       <div className="bench">
         <h1 id="ask">{t('order.ask', { trait: sheet.items[0]?.name ?? '' })}</h1>
-        <div className="label" role="group" aria-labelledby="ask">
+        <div className={`label ${glasses.length > 3 ? 'tags-many' : ''}`} role="group" aria-labelledby="ask">
           <div className="fields">
             <span>{t('pick.setOf', { n: set, total: sheet.blocks.length })}</span>
             <span>{t('sheet.seal', { hash: sealShort(sheet) })}</span>

@@ -67,7 +67,7 @@ export function PickSheet({ sheet, store, state, place, go }: SheetPart) {
     <>
       <div className="bench">
         <h1 id="ask">{t(`ask.${method}`, { trait })}</h1>
-        <div className="label" role={ballot.picks === 1 ? 'radiogroup' : 'group'} aria-labelledby="ask" onKeyDown={onKeyDown}>
+        <div className={`label ${glasses.length > 3 ? 'tags-many' : ''}`} role={ballot.picks === 1 ? 'radiogroup' : 'group'} aria-labelledby="ask" onKeyDown={onKeyDown}>
           <div className="fields">
             <span>{t('pick.setOf', { n: set, total: sheet.blocks.length })}</span>
             <span>{t('sheet.seal', { hash: sealShort(sheet) })}</span>

@@ -37,7 +37,7 @@ export function PointScale({ line, value, kept, isClosed, onSet, onClear }: Prop
         </span>
       </div>
       {line.kind !== 'liking' && line.definition && <p className="hint">{line.definition}</p>}
-      <div className={points.length > 4 ? 'stack tight' : 'point-row'}>
+      <div className={line.kind === 'category' ? 'point-columns' : points.length > 4 ? 'stack tight' : 'point-row'}>
         {points.map((point) => (
           <label key={point} className="tick-row">
             <input type="radio" name={name} value={point} checked={value === point} disabled={isClosed} onChange={() => onSet(point)} />

@@ -79,7 +79,7 @@ export function ProfileSheet({ sheet, store, state, place, go }: SheetPart) {
       ))}
       {checks.length > 0 && (
         <fieldset className="item field">
-          <legend className="legend">{t('points.ticks')}</legend>
+          <legend className="legend pt-2">{t('points.ticks')}</legend>
           {checks.map((item) => (
             <label key={item.item} className="tick-row">
               <input type="checkbox" checked={valueOf(item) === 1} disabled={isClosed} onChange={(event) => setPoint(item, event.target.checked ? 1 : 0)} />

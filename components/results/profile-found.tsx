@@ -20,12 +20,13 @@ export function ProfileFound({ profile, samples, styles }: { profile: ProfileVie
     sample: sample.sample, label: shortName(sample), note: note(sample), style: styles.get(sample.sample)!,
     values: scored.map((line) => line.cells.find((cell) => cell.sample === sample.sample)?.mean ?? null),
   }));
-  const isWide = samples.length > BESIDE;
+  const hasRadar = scored.length >= FEWEST_AXES;
+  const isWide = samples.length > BESIDE || !hasRadar;
   if (scored.length === 0) return <p>Nobody scored a glass, so there is nothing to show.</p>;
   return (
     <div className="stack">
       <div className={isWide ? 'stack' : 'ev'}>
-        {scored.length >= FEWEST_AXES && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} scale={profile.scale} />}
+        {hasRadar && <ProfileRadar axes={scored.map((line) => line.name)} series={series} isWide={isWide} scale={profile.scale} />}
         <LineTable lines={profile.lines} samples={samples} styles={styles} alpha={profile.alpha} scale={profile.scale} />
       </div>
       <Statistics profile={profile} samples={samples} />

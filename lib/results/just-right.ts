@@ -2,7 +2,7 @@ import { jarPenalties, type JarPenalty } from '@/stats';
 import { orNull } from './agreement';
 import { glassFinder } from './evidence';
 import { viewOf, type Found, type MethodQuestion } from './found';
-import { count, shortName, showPercent } from './format';
+import { count, showPercent } from './format';
 import { likingLine } from './profile-family';
 import type { RightCellView, RightSideView, SampleView, VerdictView } from './types';
 
@@ -42,7 +42,7 @@ export function rightFound(question: MethodQuestion): Found {
 export function rightSays(found: Found, samples: readonly SampleView[]): VerdictView {
   const right = viewOf(found, 'right');
   if (right.whyNot) return { headline: 'Nothing could be said.', sentences: [right.whyNot], reach: [] };
-  const nameOf = (sample: number) => shortName(samples.find((view) => view.sample === sample)!);
+  const nameOf = (sample: number) => samples.find((view) => view.sample === sample)!.label;
   const marked = right.lines.flatMap((line) => line.cells.flatMap((cell) => [
     cell.low.isMarked && { words: `${nameOf(cell.sample)}: too little ${line.name.toLowerCase()} for ${showPercent(cell.low.share)}, who liked it ${cell.low.drop!.toFixed(1)} points less`, drop: cell.low.share * cell.low.drop! },
     cell.high.isMarked && { words: `${nameOf(cell.sample)}: too much ${line.name.toLowerCase()} for ${showPercent(cell.high.share)}, who liked it ${cell.high.drop!.toFixed(1)} points less`, drop: cell.high.share * cell.high.drop! },

@@ -3,7 +3,7 @@ import { placesOf } from '../ballots/values';
 import { orNull } from './agreement';
 import { setAnswers } from './evidence';
 import { viewOf, type Found, type MethodQuestion } from './found';
-import { count, listWords, sayP, shortName, showPercent } from './format';
+import { count, listWords, sayP, showPercent } from './format';
 import type { SampleView, VerdictView } from './types';
 
 /** Up to this many people the exact distribution is used where it can be counted. */
@@ -63,7 +63,7 @@ export function orderSays(found: Found, samples: readonly SampleView[]): Verdict
   const trait = order.trait.toLowerCase();
   if (!order.friedman) return { headline: 'Nothing could be tested.', sentences: [order.whyNot ?? ''], reach: ['The rank sums below say what was ordered, and no more.'] };
   const sorted = [...order.cells].sort((a, b) => a.rankSum - b.rankSum);
-  const nameOf = (sample: number) => shortName(samples.find((view) => view.sample === sample)!);
+  const nameOf = (sample: number) => samples.find((view) => view.sample === sample)!.label;
   const inOrder = listWords(sorted.map((cell) => nameOf(cell.sample)));
   const headline = order.isShown ? `An order was shown in ${trait}: from least to most ${inOrder}.` : `No order was shown in ${trait}.`;
   const apart = sorted.flatMap((a, i) => sorted.slice(i + 1).filter((b) => ![...a.letters].some((letter) => b.letters.includes(letter))).map((b) => `${nameOf(b.sample)} above ${nameOf(a.sample)}`));

@@ -2,7 +2,7 @@ import { minimumCorrect, pairedPreference } from '@/stats';
 import { setAnswers } from './evidence';
 import { setCautions } from './choice';
 import { viewOf, type Found, type MethodQuestion } from './found';
-import { count, sayP, shortName, showPercent } from './format';
+import { count, sayP, showPercent } from './format';
 import type { PairFoundView, SampleView, VerdictView } from './types';
 
 /** Orders of a pair: AB and BA. */
@@ -50,7 +50,7 @@ export function pairSays(found: Found, samples: readonly SampleView[]): VerdictV
     headline,
     sentences: [`${needed} Were both chosen alike, so uneven a count or a more uneven one comes with ${sayP(pair.p)} (two-sided).`],
     reach: [
-      `Of all such people ${showPercent(pair.share.low)} to ${showPercent(pair.share.high)} might choose ${a ? shortName(a) : 'the first'} (95 % limits).`,
+      `Of all such people ${showPercent(pair.share.low)} to ${showPercent(pair.share.high)} might choose ${a?.label ?? 'the first'} (95 % limits).`,
       ...(pair.isShown ? [] : ['Not shown is not alike.']),
       pair.asks === 'liked' ? 'It speaks of these people: a few from the cellar are not those who buy.' : 'It says which has more of this one trait, not by how much, nor whether that is wanted.',
     ],

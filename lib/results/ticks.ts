@@ -2,7 +2,7 @@ import { cochranQ, cochranQPermutation, compactLetters, mcnemar } from '@/stats'
 import { orNull } from './agreement';
 import { glassFinder, type GlassFact } from './evidence';
 import { viewOf, type Found, type MethodQuestion } from './found';
-import { count, listWords, sayP, shortName } from './format';
+import { count, listWords, sayP } from './format';
 import { likingLine } from './profile-family';
 import type { SampleView, TickLineView, TicksView, VerdictView } from './types';
 
@@ -112,7 +112,7 @@ export function ticksSays(found: Found, samples: readonly SampleView[]): Verdict
   const headline = shown.length > 0 ? `The samples were told apart by ${count(shown.length, 'word')} of ${tested.length}.` : `No word of ${tested.length} told the samples apart.`;
   const sentences = shown.map((line) => {
     const top = [...line.counts].sort((a, b) => b.ticked / b.of - a.ticked / a.of)[0]!;
-    return `${line.name} was ${verb} most of ${shortName(samples.find((view) => view.sample === top.sample)!)} (${top.ticked} of ${top.of}; ${sayP(line.p!)}).`;
+    return `${line.name} was ${verb} most of ${samples.find((view) => view.sample === top.sample)!.label} (${top.ticked} of ${top.of}; ${sayP(line.p!)}).`;
   });
   return { headline, sentences, reach: ['A word that was not shown to differ may still differ: so few ticks show only large differences.', 'It speaks of these pulls, on that day, to these people.'] };
 }
