@@ -1,18 +1,10 @@
-import AxeBuilder from '@axe-core/playwright';
 import { expect, test, type Page } from '@playwright/test';
 import { e2eFolder, readDemo } from '../support/demo';
+import { check } from './axe';
 import { CELLAR, joinAsGuest, signedIn } from './support';
 
 const WIDTHS = [360, 1280];
 const MODES = ['paper', 'cellar'] as const;
-
-/** WCAG 2.2 A and AA by axe, and nothing wider than the screen. */
-async function check(page: Page, what: string): Promise<string[]> {
-  const { violations } = await new AxeBuilder({ page }).withTags(['wcag2a', 'wcag2aa', 'wcag21a', 'wcag21aa', 'wcag22aa']).analyze();
-  const overflow = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
-  const found = violations.map((v) => `${what}: ${v.id} ${v.nodes.map((node) => node.target.join(' ')).slice(0, 3).join(' | ')}`);
-  return overflow === 0 ? found : [...found, `${what}: ${overflow} px too wide`];
-}
 
 async function inAllLights(page: Page, path: string): Promise<string[]> {
   const found: string[] = [];
