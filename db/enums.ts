@@ -23,6 +23,17 @@ export const METHODS = [
 ] as const;
 export type Method = (typeof METHODS)[number];
 
+/**
+ * Who knows the key before it is opened: `pourer` named people who don't taste; `two_step` nobody: one person moves samples
+ * into lettered bottles, another marks letters with codes, and both may taste.
+ */
+export const CODINGS = ['pourer', 'two_step'] as const;
+export type Coding = (typeof CODINGS)[number];
+
+/** What somebody who prepares a session may read of the key. */
+export const POUR_STEPS = ['key', 'letters', 'codes'] as const;
+export type PourStep = (typeof POUR_STEPS)[number];
+
 export const SESSION_STATES = ['draft', 'sealed', 'open', 'closed', 'unsealed', 'abandoned'] as const;
 export type SessionState = (typeof SESSION_STATES)[number];
 

@@ -19,13 +19,14 @@ interface Props {
 export function SessionSteps({ access, session }: Props) {
   const which = { cellar: access.cellar.slug, sessionId: session.id };
   const base = `/c/${which.cellar}/sessions/${session.id}`;
+  const isHalf = session.coding === 'two_step' && session.unsealedAt === null;
   const mayRun = allows(access.roles, 'session.run');
   const mayDesign = allows(access.roles, 'session.design');
   return (
     <>
       {session.state === 'draft' && mayDesign && <DraftStep base={base} which={which} session={session} />}
       {session.isPourer && session.state !== 'draft' && session.state !== 'abandoned' && (
-        <LedgerRow question="You pour" note="Reading it is logged. Do not taste in this session."><Link className="btn btn-main" href={`${base}/pour`} prefetch={false}>Pour sheet</Link></LedgerRow>
+        <LedgerRow question={isHalf ? 'You prepare it' : 'You pour'} note={isHalf ? 'Reading it is logged. Show it to nobody; you may taste.' : 'Reading it is logged. Do not taste in this session.'}><Link className="btn btn-main" href={`${base}/pour`} prefetch={false}>{isHalf ? 'Your half of the coding' : 'Pour sheet'}</Link></LedgerRow>
       )}
       {session.state === 'sealed' && mayRun && (
         <LedgerRow question="Ready?" note="Opening lets people take their seats and answer."><OpenForm {...which} /></LedgerRow>

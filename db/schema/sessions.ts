@@ -1,6 +1,6 @@
 import { sql } from 'drizzle-orm';
 import { check, foreignKey, index, integer, primaryKey, real, sqliteTable, text, unique, uniqueIndex } from 'drizzle-orm/sqlite-core';
-import { ITEM_KINDS, METHODS, PHASES, SEAT_ROLES, SESSION_STATES, type Allergen } from '../enums';
+import { CODINGS, ITEM_KINDS, METHODS, PHASES, POUR_STEPS, SEAT_ROLES, SESSION_STATES, type Allergen } from '../enums';
 import { pulls } from './cellar';
 import { id, moment, version } from './columns';
 import { cellars, users } from './identity';
@@ -17,6 +17,7 @@ export const sessions = sqliteTable(
     title: text().notNull(),
     /** Neutral: panelists read it. */
     instruction: text().notNull(),
+    coding: text({ enum: CODINGS }).notNull().default('pourer'),
     /** Why the cellar asks. Never sent to a person who tastes. */
     privateQuestion: text().notNull(),
     leaderId: text().notNull().references(() => users.id),
@@ -55,13 +56,14 @@ export const sessions = sqliteTable(
   ],
 );
 
-/** Who may read the key before unsealing, and so does not taste in this session. */
+/** Who prepares the glasses, and what of the key each may read before unsealing. Only readers of the whole key don't taste. */
 export const sessionPourers = sqliteTable(
   'session_pourers',
   {
     cellarId: text().notNull(),
     sessionId: text().notNull(),
     userId: text().notNull().references(() => users.id),
+    step: text({ enum: POUR_STEPS }).notNull().default('key'),
   },
   (t) => [
     primaryKey({ columns: [t.sessionId, t.userId] }),

@@ -10,6 +10,8 @@ export const planFileSchema = z.strictObject({
   /** 256 random bits, hex: without them a guesser could try all keys against the commitment. */
   salt: z.string().regex(/^[0-9a-f]{64}$/),
   samples: z.array(z.strictObject({ sample: z.int(), label: z.string(), components: z.array(componentSchema) })),
+  /** Two-step coding: the bottle that each sample goes into. */
+  letters: z.array(z.strictObject({ sample: z.int(), letter: z.string().regex(/^[A-Z]$/) })).optional(),
   ballot: z.array(z.strictObject({ item: z.int(), phase: z.enum(PHASES), kind: z.enum(ITEM_KINDS), name: z.string() })),
   servings: z.array(z.strictObject({ seat: z.int(), block: z.int(), position: z.int(), code: z.string(), sample: z.int() })),
 });

@@ -1,5 +1,6 @@
 import 'server-only';
 import type { Db, Tx } from '@/db/client';
+import type { PourStep } from '@/db/enums';
 import { ballotItems, earlyOpenings, fills, lots, operations, pulls, sampleComponents, samples, seals, seatPeople, seats, servingSamples, servings, sessionPourers, users, vessels } from '@/db/schema';
 import { and, asc, eq } from 'drizzle-orm';
 import { alias } from 'drizzle-orm/sqlite-core';
@@ -114,15 +115,15 @@ export const listEarlyOpenings = (db: Reader, session: SessionRow) =>
     .all();
 
 /** Leader, pourers and commitment, for the report. */
-export function readFrame(db: Reader, session: SessionRow): { leader: string; pourers: string[]; commitment: string | null } {
+export function readFrame(db: Reader, session: SessionRow): { leader: string; pourers: { name: string; step: PourStep }[]; commitment: string | null } {
   const leader = db.select({ name: users.name }).from(users).where(eq(users.id, session.leaderId)).get();
   const pourers = db
-    .select({ name: users.name })
+    .select({ name: users.name, step: sessionPourers.step })
     .from(sessionPourers)
     .innerJoin(users, eq(users.id, sessionPourers.userId))
     .where(and(eq(sessionPourers.sessionId, session.id), eq(sessionPourers.cellarId, session.cellarId)))
     .orderBy(asc(users.name))
     .all();
   const seal = db.select({ commitment: seals.commitment }).from(seals).where(and(eq(seals.sessionId, session.id), eq(seals.cellarId, session.cellarId))).get();
-  return { leader: leader?.name ?? '', pourers: pourers.map((row) => row.name), commitment: seal?.commitment ?? null };
+  return { leader: leader?.name ?? '', pourers, commitment: seal?.commitment ?? null };
 }

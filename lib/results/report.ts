@@ -1,3 +1,4 @@
+import type { PourStep } from '@/db/enums';
 import type { SessionRow } from '../sessions/find';
 import type { MethodFacts } from '../methods/types';
 import { showMoment } from '../time';
@@ -19,7 +20,7 @@ interface ReportQuestion {
   session: SessionRow;
   facts: MethodFacts;
   aim: string;
-  frame: { leader: string; pourers: string[]; commitment: string | null };
+  frame: { leader: string; pourers: { name: string; step: PourStep }[]; commitment: string | null };
   samples: readonly SampleView[];
   counts: CountsView;
   early: readonly EarlyOpeningView[];
@@ -35,6 +36,12 @@ function panelWords(session: SessionRow, counts: CountsView): string {
   ].filter(Boolean) as string[];
   const whole = `${count(session.seatsPlanned, 'seat')} planned, ${counts.seatsTaken} taken, ${counts.seatsSubmitted} handed in`;
   return missing.length > 0 ? `${whole}; seats missing: ${missing.join('; ')}` : whole;
+}
+
+function pouredWords({ coding }: SessionRow, pourers: readonly { name: string; step: PourStep }[]): string {
+  const nameOf = (step: PourStep) => listWords(pourers.filter((person) => person.step === step).map((person) => person.name)) || 'nobody';
+  if (coding === 'two_step') return `${nameOf('letters')} filled lettered bottles and saw no code; ${nameOf('codes')} marked letters with codes and saw no barrel. Neither knew the key, and both may have tasted`;
+  return pourers.length > 0 ? `${nameOf('key')}: read the key before unsealing and did not taste` : 'nobody was named to read the key';
 }
 
 /** The items that a report of the test owes (ISO 4120 and ISO 13299 in outline), and what was not recorded. */
@@ -54,7 +61,7 @@ export function reportItems({ session, facts, aim, frame, samples, counts, early
     { name: 'Declared', text: session.allergens.length > 0 ? session.allergens.map((a) => ALLERGEN_WORDS[a]).join(', ') : 'no allergen' },
     { name: 'Times', text: `sealed ${when(session.sealedAt)}; opened ${when(session.openedAt)}; closed ${when(session.closedAt)}; unsealed ${when(session.unsealedAt)}` },
     { name: 'Leader', text: frame.leader },
-    { name: 'Poured by', text: frame.pourers.length > 0 ? `${listWords(frame.pourers)}: read the key before unsealing and did not taste` : 'nobody was named to read the key' },
+    { name: session.coding === 'two_step' ? 'Two-step coding' : 'Poured by', text: pouredWords(session, frame.pourers) },
     { name: 'Answers', text: `${counts.counted} counted, ${counts.unanswered} not given, ${counts.cleared} taken back, ${counts.replaced} changed before close (earlier values are kept), ${counts.late} late and set aside` },
     session.closeReason !== null && { name: 'Closed early', text: session.closeReason },
     ...early.map((opening) => ({ name: 'Early opening', text: `${opening.scope}, asked by ${opening.requestedBy} on ${opening.requestedOn}: ${opening.reason}. ${opening.decision}` })),

@@ -39,7 +39,7 @@ export function designOf(db: Db | Tx, sessionId: string) {
   return {
     samples: own.map((sample) => ({ ...sample, pullIds: parts.filter((part) => part.sampleId === sample.id).map((part) => part.pullId) })),
     items: db.select().from(ballotItems).where(eq(ballotItems.sessionId, sessionId)).orderBy(asc(ballotItems.position)).all(),
-    pourers: db.select({ userId: sessionPourers.userId, name: users.name }).from(sessionPourers).innerJoin(users, eq(users.id, sessionPourers.userId)).where(eq(sessionPourers.sessionId, sessionId)).orderBy(asc(users.name)).all(),
+    pourers: db.select({ userId: sessionPourers.userId, name: users.name, step: sessionPourers.step }).from(sessionPourers).innerJoin(users, eq(users.id, sessionPourers.userId)).where(eq(sessionPourers.sessionId, sessionId)).orderBy(asc(users.name)).all(),
   };
 }
 

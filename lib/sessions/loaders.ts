@@ -6,7 +6,7 @@ import { and, asc, count, eq } from 'drizzle-orm';
 import encodeQR from 'qr';
 import { loadAccess, type Access } from '../auth/access';
 import { allows } from '../auth/permissions';
-import { isPourer, isTaster } from '../blind/read-key';
+import { isTaster, stepOf } from '../blind/read-key';
 import { methodOf } from '../methods';
 import { factsOf, METHOD_FACTS } from '../methods/facts';
 import { reach } from '../reach';
@@ -109,7 +109,8 @@ export async function loadSession(slug: string, sessionId: string): Promise<{ ac
       samples: mayDesign || row.unsealedAt ? design.samples.map(({ label, isControl }) => ({ label, isControl })).sort((a, b) => a.label.localeCompare(b.label, 'en', { numeric: true })) : [],
       lines: design.items.filter((item) => item.kind !== 'flag').slice(0, LINES_SHOWN).map(({ name, phase }) => ({ name, phase })),
       flags: design.items.filter((item) => item.kind === 'flag').map((item) => item.name),
-      pourers: design.pourers.map((pourer) => pourer.name),
+      coding: row.coding,
+      pourers: design.pourers.map((pourer) => (pourer.step === 'key' ? pourer.name : `${pourer.name} (${pourer.step})`)),
       seatsPlanned: row.seatsPlanned, reservesPlanned: row.reservesPlanned, replicates: row.replicates, alpha: row.alpha,
       servingTemperatureC: row.servingTemperatureC, servingVolumeMl: row.servingVolumeMl, restS: row.restS, allergens: row.allergens,
       joinCode: mayRun ? row.joinCode : null, joinUrl, joinQr: joinUrl ? qrPicture(joinUrl) : null,
@@ -117,8 +118,8 @@ export async function loadSession(slug: string, sessionId: string): Promise<{ ac
       sealedAt: show(row.sealedAt), openedAt: show(row.openedAt), closedAt: show(row.closedAt), unsealedAt: show(row.unsealedAt),
       abandonedAt: show(row.abandonedAt), abandonReason: row.abandonReason, closeReason: row.closeReason,
       missing: isDraft ? listMissing(db, row) : [],
-      warnings: isDraft ? [...neutralityWarnings(row), ...methodOf(row.method).warnings(question)] : [],
-      isPourer: isPourer(db, row.id, access.user.id), isTaster: taster,
+      warnings: isDraft ? [...neutralityWarnings(row), ...methodOf(row.method).warnings(question), ...(row.coding === 'two_step' && row.replicates > 1 ? ['Who marks letters with codes sees which codes come from one bottle: for that person the replicates are not hidden.'] : [])] : [],
+      isPourer: stepOf(db, row.id, access.user.id) !== null, isTaster: taster,
       lateAnswers: db.select({ n: count() }).from(operations).where(and(eq(operations.sessionId, row.id), eq(operations.admission, 'late'))).get()!.n,
       openings: mayRun ? listOpenings(access, row) : [],
     },
@@ -144,6 +145,7 @@ function designChoices(access: Access, chosenPulls: readonly string[]): DesignCh
 }
 
 const NEW_SESSION = {
+  coding: 'pourer',
   method: 'profile', seatsPlanned: 8, reservesPlanned: 2, replicates: 2, alpha: 0.05, servingVolumeMl: 30, restS: 60, allergens: ['sulfites'],
   instruction: 'Taste each glass by itself, in the order of the sheet. Spit, rinse and wait between glasses.',
 };
@@ -169,7 +171,10 @@ export async function loadDesign(slug: string, sessionId: string) {
     flags: design.items.filter((item) => item.kind === 'flag').map((item) => item.descriptorId),
     seatsPlanned: row.seatsPlanned, reservesPlanned: row.reservesPlanned, replicates: row.replicates, alpha: row.alpha,
     servingTemperatureC: row.servingTemperatureC ?? '', servingVolumeMl: row.servingVolumeMl, restS: row.restS, allergens: row.allergens,
-    pourers: design.pourers.map((pourer) => pourer.userId),
+    coding: row.coding,
+    pourers: design.pourers.filter((pourer) => pourer.step === 'key').map((pourer) => pourer.userId),
+    letteredBy: design.pourers.find((pourer) => pourer.step === 'letters')?.userId ?? '',
+    codedBy: design.pourers.find((pourer) => pourer.step === 'codes')?.userId ?? '',
   };
   return { access, choices: designChoices(access, pullIds), defaults, sessionId: row.id, version: row.version, title: row.title };
 }

@@ -1,6 +1,6 @@
 import 'server-only';
 import { getDb, type Tx } from '@/db/client';
-import { PHASES, type ItemKind, type Phase } from '@/db/enums';
+import { PHASES, type ItemKind, type Phase, type PourStep } from '@/db/enums';
 import { ballotItems, descriptors, oneTimeLinks, pulls, fills, sampleComponents, samples, seatPeople, seats, sessionPourers, sessions, vessels } from '@/db/schema';
 import { and, eq, inArray } from 'drizzle-orm';
 import { recordAudit } from '../audit/record';
@@ -95,9 +95,13 @@ function writePourers(tx: Tx, cellarId: string, sessionId: string, input: DraftI
   const members = new Set(listMembers(tx, cellarId).map((member) => member.id));
   if (!members.has(input.leaderId)) throw new AppError('invalid', 'The leader must be a member.', { leaderId: 'Choose a member' });
   tx.delete(sessionPourers).where(eq(sessionPourers.sessionId, sessionId)).run();
-  for (const userId of new Set(input.pourers)) {
-    if (!members.has(userId)) throw new AppError('invalid', 'A pourer must be a member.', { pourers: 'Choose members' });
-    tx.insert(sessionPourers).values({ cellarId, sessionId, userId }).run();
+  const named: { userId: string; step: PourStep }[] =
+    input.coding === 'two_step'
+      ? [...(input.letteredBy ? [{ userId: input.letteredBy, step: 'letters' as const }] : []), ...(input.codedBy ? [{ userId: input.codedBy, step: 'codes' as const }] : [])]
+      : [...new Set(input.pourers)].map((userId) => ({ userId, step: 'key' as const }));
+  for (const { userId, step } of named) {
+    if (!members.has(userId)) throw new AppError('invalid', 'Who pours must be a member.', { pourers: 'Choose members' });
+    tx.insert(sessionPourers).values({ cellarId, sessionId, userId, step }).run();
   }
 }
 
@@ -110,7 +114,7 @@ export function saveDraft(access: Access, input: DraftInput): string {
   requireCapability(access, 'session.design');
   const { cellar } = access;
   const values = {
-    method: input.method, title: input.title, instruction: input.instruction, privateQuestion: input.privateQuestion,
+    method: input.method, coding: input.coding, title: input.title, instruction: input.instruction, privateQuestion: input.privateQuestion,
     leaderId: input.leaderId, scheduledFor: input.scheduledFor ? fromLocalInput(input.scheduledFor, cellar.timeZone) : null,
     seatsPlanned: input.seatsPlanned, reservesPlanned: input.reservesPlanned, replicates: input.replicates, alpha: input.alpha,
     servingTemperatureC: input.servingTemperatureC ?? null, servingVolumeMl: input.servingVolumeMl, restS: input.restS, allergens: input.allergens,
@@ -144,7 +148,7 @@ export function duplicateSession(access: Access, sessionId: string): string {
     const from = findSession(tx, access.cellar.id, sessionId);
     const id = newId();
     tx.insert(sessions).values({
-      id, cellarId: from.cellarId, state: 'draft', method: from.method, title: from.title, instruction: from.instruction, privateQuestion: from.privateQuestion,
+      id, cellarId: from.cellarId, state: 'draft', method: from.method, coding: from.coding, title: from.title, instruction: from.instruction, privateQuestion: from.privateQuestion,
       leaderId: access.user.id, seatsPlanned: from.seatsPlanned, reservesPlanned: from.reservesPlanned, replicates: from.replicates, alpha: from.alpha,
       servingTemperatureC: from.servingTemperatureC, servingVolumeMl: from.servingVolumeMl, restS: from.restS, allergens: from.allergens, createdAt: now(),
     }).run();

@@ -26,7 +26,16 @@ export function listMissing(db: Tx | Db, session: SessionRow): string[] {
     const lines = db.select().from(ballotItems).where(and(eq(ballotItems.sessionId, session.id), eq(ballotItems.kind, kind))).all();
     if (lines.length < min) missing.push(lines.length === 0 ? 'The ballot has no descriptor to ask for.' : `The ballot asks for ${min} descriptors at least; there is ${lines.length}.`);
   }
-  const pourers = db.select().from(sessionPourers).where(eq(sessionPourers.sessionId, session.id)).all();
-  if (pourers.length === 0) missing.push('Nobody is named to pour: without a pourer nobody could read which bottle gets which code.');
+  return [...missing, ...missingPeople(db, session)];
+}
+
+function missingPeople(db: Tx | Db, session: SessionRow): string[] {
+  const named = db.select().from(sessionPourers).where(eq(sessionPourers.sessionId, session.id)).all();
+  if (session.coding === 'pourer') return named.length === 0 ? ['Nobody is named to pour: without a pourer nobody could read which bottle gets which code.'] : [];
+  const missing: string[] = [];
+  // In a set of glasses letters would tell which are alike, and so the answer.
+  if (factsOf(session.method).glassesPerBlock !== null) missing.push(`${factsOf(session.method).name} can’t be coded in two steps: who marks the glasses of a set would see which are alike. Name a pourer who does not taste.`);
+  if (!named.some(({ step }) => step === 'letters')) missing.push('Nobody is named to fill the lettered bottles.');
+  if (!named.some(({ step }) => step === 'codes')) missing.push('Nobody is named to mark letters with codes.');
   return missing;
 }

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { ALLERGENS, METHODS, PHASES } from '@/db/enums';
+import { ALLERGENS, CODINGS, METHODS, PHASES } from '@/db/enums';
 
 const slug = z.string().min(1).max(80);
 const id = z.uuid({ error: 'Not one of the choices' });
@@ -34,8 +34,12 @@ export const draftSchema = z.object({
   servingVolumeMl: z.number({ error: 'How many millilitres?' }).int('A whole number').min(5, 'At least 5 mL').max(150, 'At most 150 mL'),
   restS: z.number({ error: 'How many seconds?' }).int('A whole number').min(0, 'Not below 0').max(900, 'At most 900 s'),
   allergens: z.array(z.enum(ALLERGENS)).default([]),
+  coding: z.enum(CODINGS).default('pourer'),
   pourers: z.array(id).max(20).default([]),
-});
+  /** Two-step coding: who moves samples into lettered bottles, and who marks letters with codes. */
+  letteredBy: id.optional(),
+  codedBy: id.optional(),
+}).refine((draft) => draft.coding !== 'two_step' || draft.letteredBy === undefined || draft.letteredBy !== draft.codedBy, { path: ['codedBy'], error: 'Another person than the one with the letters: one alone would know the key' });
 export type DraftInput = z.output<typeof draftSchema>;
 
 /** One session of one cellar: what every button on its page sends. */

@@ -3,6 +3,7 @@ import { getDb, type Tx } from '@/db/client';
 import { ballotItems, descriptors, fills, lots, pulls, sampleComponents, samples, seats, servings, sessions, vessels } from '@/db/schema';
 import { and, asc, eq } from 'drizzle-orm';
 import { randomBytes, randomInt } from 'node:crypto';
+import { shuffled } from '@/stats';
 import { recordAudit } from '../audit/record';
 import { requireCapability, type Access } from '../auth/access';
 import type { PlanFile } from '../blind/plan-file';
@@ -65,6 +66,9 @@ function describeSamples(tx: Tx, session: SessionRow): PlanFile['samples'] {
   }));
 }
 
+/** Which lettered bottle each sample goes into, drawn apart from the codes. */
+const drawLetters = (count: number, draw: Draw) => shuffled(Array.from({ length: count }, (_, i) => String.fromCharCode(65 + i)), draw).map((letter, i) => ({ sample: i + 1, letter }));
+
 /** The sample of a constant reference: the control, or else the first. */
 function referenceOf(tx: Tx, sessionId: string): number {
   const own = tx.select({ isControl: samples.isControl }).from(samples).where(eq(samples.sessionId, sessionId)).orderBy(asc(samples.ordinal)).all();
@@ -109,6 +113,7 @@ export function sealSession(access: Access, sessionId: string, draw: Draw = syst
       session: { id: sessionId, title: session.title, method: session.method, sealedAt: sealedAt.toISOString() },
       salt: randomBytes(32).toString('hex'),
       samples: described,
+      ...(session.coding === 'two_step' && { letters: drawLetters(described.length, draw) }),
       ballot,
       servings: planned.map(({ seat, block, position, code, sample }) => ({ seat, block, position, code, sample })),
     }, sealedAt);

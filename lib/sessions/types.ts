@@ -1,4 +1,4 @@
-import type { Allergen, Method, SessionState } from '@/db/enums';
+import type { Allergen, Coding, Method, SessionState } from '@/db/enums';
 import type { MethodFacts } from '../methods/types';
 
 export interface SessionListItem {
@@ -26,6 +26,7 @@ export interface SessionView {
   samples: { label: string; isControl: boolean }[];
   lines: { name: string; phase: string }[];
   flags: string[];
+  coding: Coding;
   pourers: string[];
   seatsPlanned: number;
   reservesPlanned: number;

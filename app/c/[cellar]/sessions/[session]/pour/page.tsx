@@ -1,5 +1,6 @@
 import type { Metadata } from 'next';
 import Link from 'next/link';
+import { HalfSheet } from '@/components/pour/half-sheet';
 import { PourSheet } from '@/components/pour/pour-sheet';
 import { PrintButton } from '@/components/pour/print-button';
 import { LedgerHead, LedgerPage, LedgerRow } from '@/components/ui/ledger';
@@ -10,9 +11,9 @@ export const metadata: Metadata = { title: 'Pour sheet' };
 
 export default async function PourPage({ params }: PageProps<'/c/[cellar]/sessions/[session]/pour'>) {
   const { cellar, session } = await params;
-  const { sheet, refusal, title } = await orNotFound(loadPourSheet(cellar, session));
+  const { sheet, half, refusal, title } = await orNotFound(loadPourSheet(cellar, session));
   const back = `/c/${cellar}/sessions/${session}`;
-  if (!sheet) {
+  if (!sheet && !half) {
     return (
       <LedgerPage>
         <LedgerHead margin="Pour sheet" title="You are not a pourer here." />
@@ -27,7 +28,7 @@ export default async function PourPage({ params }: PageProps<'/c/[cellar]/sessio
         <Link className="btn" href={back}>Back</Link>
         <p className="note">A4 or Letter. Big digits; scissors along the dashed line.</p>
       </div>
-      <PourSheet sheet={sheet} />
+      {half ? <HalfSheet sheet={half} /> : <PourSheet sheet={sheet!} />}
     </main>
   );
 }

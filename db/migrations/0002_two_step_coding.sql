@@ -1,0 +1,2 @@
+ALTER TABLE `session_pourers` ADD `step` text DEFAULT 'key' NOT NULL;--> statement-breakpoint
+ALTER TABLE `sessions` ADD `coding` text DEFAULT 'pourer' NOT NULL;
