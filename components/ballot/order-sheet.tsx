@@ -65,7 +65,7 @@ export function OrderSheet({ sheet, store, state, place, go }: SheetPart) {
           <p className="soft">{t('order.least')}</p>
           <ol className="stack tight">
             {order.map((position, i) => (
-              <li key={position} className="row" style={{ justifyContent: 'space-between' }}>
+              <li key={position} className="row wrap" style={{ justifyContent: 'space-between' }}>
                 <Code code={codeOf(position)} size="s" label={t('common.codeWord')} />
                 <span className="row">
                   <button type="button" className="btn" disabled={isClosed || i === 0} aria-label={t('order.less', { code: spoken(position) })} onClick={() => move(position, -1)}>↑</button>

@@ -72,6 +72,8 @@ test('undo, clear, the other hand and another language, by touch', async ({ brow
   await phone.getByRole('button', { name: 'the left hand' }).click();
   await expect(phone.locator('html')).toHaveAttribute('data-hand', 'left');
   await phone.getByRole('button', { name: 'Français' }).click();
+  await expect(phone.locator('html')).toHaveAttribute('lang', 'fr');
+  await phone.getByRole('button', { name: 'Fermer' }).click();
   await expect(phone.getByRole('heading', { name: 'Nez' })).toBeVisible();
   await expect(phone.locator('html')).toHaveAttribute('lang', 'fr');
   // Words of the built-in lexicon come along; what was scored stays.

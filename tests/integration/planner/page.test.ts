@@ -29,7 +29,7 @@ describe('the page to plan a test, without JavaScript', () => {
   it('answers the questions by a GET form, and leads to the design with the method in it', async () => {
     const page = await owner.submitForm(await owner.get(`${home}/plan`), 'Show what fits', { question: 'taste', samples: 6, people: 12, wine: '' });
     expect(page.status).toBe(200);
-    expect(page.text).toContain('Profile in categories');
+    expect(page.text).toContain('Category profile');
     expect(page.document.querySelector(`a[href="${home}/sessions/new?method=profile"]`)).not.toBeNull();
     const design = await owner.get(`${home}/sessions/new?method=triangle`);
     expect(design.document.querySelector('select[name=method] option[selected]')?.getAttribute('value')).toBe('triangle');
