@@ -28,7 +28,7 @@ interface Props {
 /** The whole design on one page, in the order in which a leader thinks of it. */
 export function DesignForm({ cellar, choices, defaults, sessionId, version }: Props) {
   const [method, setMethod] = useState(defaults.method as Method);
-  const [coding, setCoding] = useState(String(defaults.coding));
+  const [isTwoStep, setTwoStep] = useState(defaults.coding === 'two_step');
   const facts = choices.methods.find((candidate) => candidate.method === method)!;
   const { min, max } = facts.sampleCount;
   const isSets = facts.unit === 'set';
@@ -78,18 +78,20 @@ export function DesignForm({ cellar, choices, defaults, sessionId, version }: Pr
               <SelectField field={fields.leaderId!} label="Leader" options={choices.members} />
               <TextField field={fields.scheduledFor!} label="When" type="datetime-local" />
             </div>
-            <div onChange={(event) => setCoding((event.target as unknown as HTMLSelectElement).value)}>
+            <div onChange={(event) => setTwoStep((event.target as unknown as HTMLSelectElement).value === 'two_step')}>
               <SelectField field={fields.coding!} label="Who knows the key?" options={CODING_CHOICES} />
             </div>
-            {coding === 'two_step' ? (
-              <>
+            <div hidden={isTwoStep}><TicksField field={fields.pourers!} label="Who pours?" hint="A pourer may read the key and does not taste in this session." options={choices.members} /></div>
+            <details open={isTwoStep}>
+              <summary className="fold">Two-step coding</summary>
+              <div className="stack pt-3">
                 <p className="soft">One person fills lettered bottles and sees no code; another marks letters with codes and sees no barrel. Both may taste. For flights, not for sets of glasses.</p>
                 <div className="grid-fields">
                   <SelectField field={fields.letteredBy!} label="Fills the lettered bottles" options={[{ value: '', label: 'Choose' }, ...choices.members]} />
                   <SelectField field={fields.codedBy!} label="Marks letters with codes" options={[{ value: '', label: 'Choose' }, ...choices.members]} />
                 </div>
-              </>
-            ) : <TicksField field={fields.pourers!} label="Who pours?" hint="A pourer may read the key and does not taste in this session." options={choices.members} />}
+              </div>
+            </details>
           </section>
         </>
       )}
