@@ -2,7 +2,7 @@ import { expect, test, type Browser, type Page } from '@playwright/test';
 import { e2eFolder, readDemo, signInOf } from '../support/demo';
 import { Client } from '../support/http';
 import { check } from './axe';
-import { CELLAR, joinAsGuest } from './support';
+import { CELLAR, joinAsGuest, keptForOffline } from './support';
 
 const LANGUAGES = ['en', 'es', 'fr'];
 const WIDTHS = [320, 390, 768];
@@ -142,4 +142,32 @@ test('ticks and points: none is chosen beforehand, one can be cleared, in every 
   await expect(ticks.locator('main input[type=checkbox]').first()).toBeChecked();
   expect(await smallTargets(ticks)).toEqual([]);
   await ticks.context().close();
+});
+
+test('every kind of ballot opens again with no network, and keeps what is answered there', async ({ browser }) => {
+  const kinds = [
+    { method: 'duo_trio', samples: 2, lines: 0, answer: (phone: Page) => phone.locator('button.tag').first().click(), is: (phone: Page) => expect(phone.locator('button.tag').first()).toHaveAttribute('aria-checked', 'true') },
+    { method: 'ranking', samples: 3, lines: 1, answer: (phone: Page) => phone.locator('button.tag').first().click(), is: (phone: Page) => expect(phone.locator('button.tag').first()).toHaveAttribute('aria-pressed', 'true') },
+    { method: 'free_note', samples: 2, lines: 0, answer: (phone: Page) => phone.locator('#note').fill('Lemon'), is: (phone: Page) => expect(phone.getByRole('group', { name: 'Lemon' })).toBeVisible() },
+    { method: 'rate_all', samples: 2, lines: 2, answer: (phone: Page) => phone.getByLabel('strong').first().check(), is: (phone: Page) => expect(phone.getByLabel('strong').first()).toBeChecked() },
+  ];
+  for (const { method, samples, lines, answer, is } of kinds) {
+    const phone = await joined(browser, method, samples, lines);
+    const path = new URL(phone.url()).pathname;
+    await keptForOffline(phone);
+    await phone.context().setOffline(true);
+    await phone.goto('about:blank');
+    await phone.goto(path);
+    await expect(phone.locator('main[aria-busy=false]')).toBeVisible();
+    await answer(phone);
+    await is(phone);
+    if (method !== 'duo_trio') {
+      // A pick is kept when it is locked; the others are kept as they come.
+      await expect(phone.getByText(/\d on this phone/).first()).toBeVisible();
+      await phone.goto('about:blank');
+      await phone.goto(path);
+      await is(phone);
+    }
+    await phone.context().close();
+  }
 });

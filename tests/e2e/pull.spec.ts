@@ -64,3 +64,27 @@ test('a tag opens the sheet at its barrel', async ({ browser }) => {
   await expect(page.locator('.pull-name')).toHaveText('47');
   await page.context().close();
 });
+
+test('signing out forgets the cellar’s pages on this device', async ({ browser }) => {
+  const { email, password } = signInOf(readDemo(e2eFolder()), 'cellar hand');
+  const context = await browser.newContext({ viewport: { width: 360, height: 740 } });
+  const page = await context.newPage();
+  await page.goto('/sign-in');
+  await page.getByLabel('E-mail address').fill(email);
+  await page.getByLabel('Password').fill(password);
+  await page.getByRole('button', { name: 'Sign in' }).click();
+  await page.waitForURL('**/c/**');
+  await page.goto('/pull/pellow-rake');
+  await keptForOffline(page);
+  const kept = () => page.evaluate(async () => (await (await caches.open('tercet-cellar')).keys()).map((request) => new URL(request.url).pathname));
+  expect(await kept()).toEqual(['/pull/pellow-rake']);
+  await page.goto('/account');
+  await page.getByRole('button', { name: 'Sign out', exact: true }).click();
+  await page.waitForURL('**/sign-in**');
+  await expect.poll(kept).toEqual([]);
+  await context.setOffline(true);
+  await page.goto('/pull/pellow-rake').catch(() => undefined);
+  await expect(page.getByRole('heading', { name: 'No signal' })).toBeVisible();
+  await expect(page.getByText('Barrel')).toHaveCount(0);
+  await context.close();
+});

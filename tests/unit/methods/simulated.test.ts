@@ -2,10 +2,11 @@ import { xoroshiro128plus } from 'pure-rand/generator/xoroshiro128plus';
 import { describe, expect, it } from 'vitest';
 import type { Method } from '@/db/enums';
 import { methodOf } from '@/lib/methods';
-import { countAnswers, type GlassFact, type OperationFact, type SeatFact } from '@/lib/results/evidence';
+import { countAnswers, type GlassFact, type OperationFact } from '@/lib/results/evidence';
 import type { Found, MethodQuestion } from '@/lib/results/found';
 import type { ItemFact } from '@/lib/results/data';
 import { CHANCE, power, proportionCorrect } from '@/stats';
+import { itemFact as item, operationFact as op, seatFact } from '../../support/facts';
 import { normalDraw, pickBy, seeded } from '../../support/tasters';
 
 /*
@@ -14,12 +15,6 @@ import { normalDraw, pickBy, seeded } from '../../support/tasters';
  */
 const SESSIONS = 1_000;
 const ALPHA = 0.05;
-
-const seatFact = (number: number): SeatFact => ({ id: `s${number}`, number, isReserve: false, isClaimed: true, isSubmitted: true, hasLeft: false, role: 'taste', name: null });
-const op = (seatId: string, block: number, position: number | null, rest: Partial<OperationFact>): OperationFact => ({
-  seatId, block, position, item: null, kind: 'score', number: null, text: null, isGuess: false, isLate: false, tokenGeneration: 1, seq: 1, receiptNo: 1, ...rest,
-});
-const item = (n: number, kind: ItemFact['kind'], name = `Line ${n}`): ItemFact => ({ item: n, kind, phase: 'palate', name, definition: '', lowAnchor: 'none', highAnchor: 'very strong' });
 
 /** One session: what `answer` says for each block of each seat, felt as sample mean plus error, through plan and analysis. */
 function session(method: Method, means: readonly number[], people: number, random: () => number, items: readonly ItemFact[], answer: (felt: readonly number[], glasses: readonly GlassFact[]) => OperationFact[], alpha = ALPHA): Found {
