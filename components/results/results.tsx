@@ -48,18 +48,6 @@ function FoundNote({ results }: { results: ResultsView }) {
   return <>{name}. {answers ? `${count(answers.n, 'answer')} by ${panelists}` : panelists}.</>;
 }
 
-/** What can be taken along: the answers, and a bundle that computes the figures anew. */
-function Files({ path, id }: { path: string; id: string }) {
-  return (
-    <>
-      <span className="block pb-2"><a href={`${path}/export/answers.csv`} download>Answers (CSV)</a></span>
-      <span className="block pb-2"><a href={`${path}/export/answers.xlsx`} download>Answers (XLSX)</a></span>
-      <span className="block pb-2"><a href={`${path}/export/reproduce.zip`} download>Reproduce in R (ZIP)</a></span>
-      <a href={`${path}/results`} download={`results-${id.slice(0, 8)}.json`}>All numbers (JSON)</a>
-    </>
-  );
-}
-
 interface Section {
   asks: string;
   found: ReactNode;
@@ -105,7 +93,7 @@ export function Results({ results, home, mayCall, maySeeBarrels, calls, cellar }
           {calls.length > 0 ? <CallsTable cellar={cellar} calls={calls} /> : <p className="soft">No call rests on this session yet.</p>}
         </LedgerRow>
       )}
-      <LedgerRow question="How was it run?" note={<Files path={`/api/v1${home}/sessions/${session.id}`} id={session.id} />}><Report items={results.report} /></LedgerRow>
+      <LedgerRow question="How was it run?" note={<a href={`/api/v1${home}/sessions/${session.id}/results`} download={`results-${session.id.slice(0, 8)}.json`}>All numbers as a file (JSON)</a>}><Report items={results.report} /></LedgerRow>
     </LedgerPage>
   );
 }
