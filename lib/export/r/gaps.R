@@ -1,10 +1,10 @@
 # Lines that not everybody scored wholly: the same model by restricted maximum likelihood with
 # Kenward and Roger's degrees of freedom, over everybody who scored a glass. Needs lme4, lmerTest, pbkrtest.
 
-has_mixed_models <- all(vapply(c("lme4", "lmerTest", "pbkrtest"), requireNamespace, logical(1), quietly = TRUE))
+has_mixed_models <- function() all(vapply(c("lme4", "lmerTest", "pbkrtest"), requireNamespace, logical(1), quietly = TRUE))
 
 analyse_gaps <- function(prefix, d, design) {
-  if (!has_mixed_models) return(skip(prefix, "needs the packages lme4, lmerTest and pbkrtest"))
+  if (!has_mixed_models()) return(skip(prefix, "needs the packages lme4, lmerTest and pbkrtest"))
   d <- as_levels(d, design$samples)
   # With one score a cell, interaction and error are one.
   repeated <- any(table(d$seat, d$sample) > 1)
