@@ -14,10 +14,9 @@ To run it: install R (r-project.org), then, in this folder,
     Rscript reproduce.R
 
 It prints each figure, as the program gave it and as R gives it, and the difference.
-It ends with status 1 if any differs by more than one part in a million (one in a
-hundred thousand for lines with gaps, where both search for the best fit), or could
-not be computed. For lines with gaps the packages lme4, lmerTest and pbkrtest are
-needed; without them those figures are named as skipped.
+It ends with status 1 if any differs by more than one part in a million, or could not
+be computed. For lines with gaps the packages lme4, lmerTest and pbkrtest are needed;
+without them those figures are named as skipped.
 
 data/answers.csv   one row for each answer that counts. Late answers, and values that
                    the panelist replaced or took back before close, are not in it.

@@ -15,13 +15,11 @@ reason_to_skip <- function(id) {
   NA
 }
 
-# How far two figures may lie apart: one part in a million. Both sides search for the best fit of
-# a mixed model, so its figures may differ by ten times that. R's ptukey is good to about ten decimals,
-# so p of pairs, and limits near 0, are also compared in absolute terms.
+# How far two figures may lie apart: one part in a million. R's ptukey is good to about ten decimals,
+# so p of pairs, and limits near 0, are also let pass when they lie closer than 1e-8.
 allowed <- function(id, a, b) {
-  share <- if (grepl(".mixed.", id, fixed = TRUE)) 1e-5 else 1e-6
   floor <- if (grepl("\\.p$", id) && !grepl(".pair.", id, fixed = TRUE)) 0 else 1e-8
-  max(share * max(abs(a), abs(b)), floor)
+  max(1e-6 * max(abs(a), abs(b)), floor)
 }
 
 compare_figures <- function(figures) {

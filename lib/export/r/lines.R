@@ -97,9 +97,11 @@ icc_limits <- function(targets, judges, error, n, k, level = 0.95) {
 
 # The place in the flight after panelists and samples (type II).
 place_in_flight <- function(prefix, d, design) {
-  d <- as_levels(d, design$samples)
-  with_place <- lm(value ~ seat + sample + place, d)
-  test <- anova(lm(value ~ seat + sample, d), with_place)[2, ]
+  d <- droplevels(as_levels(d, design$samples))
+  # A factor with one level says nothing, and lm refuses it.
+  others <- Filter(function(name) nlevels(d[[name]]) > 1, c("seat", "sample"))
+  with_place <- lm(reformulate(c(others, "place"), "value"), d)
+  test <- anova(lm(reformulate(c("1", others), "value"), d), with_place)[2, ]
   put_test(prefix, test[["F"]], test[["Df"]], with_place$df.residual)
   effects <- coef(with_place)[grepl("^place", names(coef(with_place)))]
   if (anyNA(effects)) skip(paste0(prefix, ".span"), "places can't be told apart one by one")
