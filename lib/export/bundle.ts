@@ -20,7 +20,7 @@ export interface BundleSource {
 }
 
 /** The parts of the script; the first is the one to run. */
-const SCRIPTS = ['reproduce.R', 'read.R', 'compare.R', 'lines.R', 'gaps.R', 'panelists.R', 'choices.R', 'orders.R', 'counts.R'] as const;
+const SCRIPTS = ['reproduce.R', 'read.R', 'compare.R', 'range.R', 'lines.R', 'gaps.R', 'panelists.R', 'choices.R', 'orders.R', 'counts.R'] as const;
 
 /** What an untouched line of an answered glass counts as, where it is not missing. */
 const ABSENT: Partial<Record<Method, number>> = { rate_all: 0 };

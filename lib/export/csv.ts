@@ -15,6 +15,6 @@ const BYTE_ORDER_MARK = '\uFEFF';
  * A word that begins like a formula gets an apostrophe before it; numbers stay numbers.
  */
 export function csvOf({ columns, rows }: Table): string {
-  const body = Papa.unparse({ fields: [...columns], data: rows.map((row) => [...row]) }, { escapeFormulae: FORMULA, newline: '\r\n' });
+  const body = Papa.unparse([columns, ...rows].map((row) => [...row]), { escapeFormulae: FORMULA, newline: '\r\n' });
   return `${BYTE_ORDER_MARK}${body}\r\n`;
 }

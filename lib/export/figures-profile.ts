@@ -37,7 +37,7 @@ export function lineFigures(line: LineView): Figure[] {
     ...(line.method === 'none' ? plainFigures(line) : testedFigures(line, line.method)),
     ...testOf(`${id}.position`, `${line.name}, place in the flight`, line.position),
     ...(line.position ? figuresUnder(`${id}.position`, `${line.name}, place in the flight`, { span: line.position.span }) : []),
-    ...figuresUnder(id, line.name, { at_ends: line.atEnds, kendall_w: line.kendallW, kendall_p: complete >= PANEL_FOR_F ? line.kendallP : null }),
+    ...figuresUnder(id, line.name, { at_ends: line.cells.length > 0 ? line.atEnds : null, kendall_w: line.kendallW, kendall_p: complete >= PANEL_FOR_F ? line.kendallP : null }),
     ...(line.icc ? figuresUnder(`${id}.icc`, `${line.name}, agreement of the panel’s mean`, { value: line.icc.value, low: line.icc.low, high: line.icc.high }) : []),
   ];
 }

@@ -43,6 +43,6 @@ apostrophe before them.
 Not computed anew: letters beside means (they follow from the p of the pairs), p values
 that the program gets by counting arrangements (Kendall's W below 8 panelists, orders
 below 13 people, words that were ticked), and p of liking that was lost. Tukey's p is
-compared to eight decimals, since R's own is not exact beyond.
+compared to eight decimals.
 `;
 }

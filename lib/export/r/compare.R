@@ -15,8 +15,8 @@ reason_to_skip <- function(id) {
   NA
 }
 
-# How far two figures may lie apart: one part in a million. R's ptukey is good to about ten decimals,
-# so p of pairs, and limits near 0, are also let pass when they lie closer than 1e-8.
+# How far two figures may lie apart: one part in a million. Beside that, p of pairs and what may lie near 0
+# (limits, differences, F) pass when they are closer than 1e-8.
 allowed <- function(id, a, b) {
   floor <- if (grepl("\\.p$", id) && !grepl(".pair.", id, fixed = TRUE)) 0 else 1e-8
   max(1e-6 * max(abs(a), abs(b)), floor)

@@ -23,7 +23,7 @@ analyse_gaps <- function(prefix, d, design) {
     pair <- lmerTest::contest1D(fit, (seq_len(k) == b) - (seq_len(k) == a), ddf = "Kenward-Roger")
     reach <- tukey_critical(design$alpha, k, pair[["df"]]) / sqrt(2) * pair[["Std. Error"]]
     needed <- max(needed, reach)
-    p <- ptukey(abs(pair[["t value"]]) * sqrt(2), k, pair[["df"]], lower.tail = FALSE)
+    p <- range_tail(abs(pair[["t value"]]) * sqrt(2), k, pair[["df"]])
     put_all(paste(prefix, "pair", a, b, sep = "."), list(difference = pair[["Estimate"]], low = pair[["Estimate"]] - reach, high = pair[["Estimate"]] + reach, p = p))
   }
   put(paste0(prefix, ".smallest_difference"), needed)

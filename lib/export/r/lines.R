@@ -1,12 +1,6 @@
 # Scores line by line: analysis of variance with panelists as a random sample of people, Tukey's
 # differences, agreement, and the place in the flight. Base R.
 
-# Tukey's critical value. qtukey stops at four decimals; the root of ptukey is sharper.
-tukey_critical <- function(alpha, k, df) {
-  near <- qtukey(1 - alpha, k, df)
-  uniroot(function(q) ptukey(q, k, df, lower.tail = FALSE) - alpha, near * c(0.99, 1.01), extendInt = "downX", tol = 1e-13)$root
-}
-
 as_levels <- function(d, samples) transform(d, seat = factor(seat), sample = factor(sample, levels = seq_len(samples)), place = factor(position))
 
 # Panelists who scored every glass on the line.
@@ -50,7 +44,7 @@ compare_pairs <- function(prefix, means, n, ms, df, alpha) {
     put_all(paste(prefix, "sample", a, sep = "."), list(mean = means[[a]], n = n, low = means[[a]] - reach / 2, high = means[[a]] + reach / 2))
     for (b in seq_len(k)[seq_len(k) > a]) {
       difference <- means[[b]] - means[[a]]
-      p <- ptukey(abs(difference) / sqrt(ms / n), k, df, lower.tail = FALSE)
+      p <- range_tail(abs(difference) / sqrt(ms / n), k, df)
       put_all(paste(prefix, "pair", a, b, sep = "."), list(difference = difference, low = difference - reach, high = difference + reach, p = p))
     }
   }
@@ -68,6 +62,15 @@ use_of_scale <- function(prefix, d, interaction, design) {
   put_test(paste0(prefix, ".scaling"), (scaling / df1) / ((interaction - scaling) / df2), df1, df2)
 }
 
+# The p of W: Iman and Davenport's F. Where all agree completely F has no value; the p is then the
+# chance that all the others repeat the first one's order. `ranks`: a row for each person.
+concordance_p <- function(w, ranks) {
+  others <- nrow(ranks) - 1
+  k <- ncol(ranks)
+  if (w > 1 - 1e-12) return((factorial(k) / prod(factorial(table(ranks[1, ]))))^-others)
+  pf(others * w / (1 - w), k - 1, others * (k - 1), lower.tail = FALSE)
+}
+
 # Kendall's W and ICC(2,k) (Shrout and Fleiss 1979; McGraw and Wong 1996) of the panelists' means.
 agreement_of <- function(prefix, full, design) {
   cells <- cell_means(as_levels(full, design$samples))
@@ -75,7 +78,7 @@ agreement_of <- function(prefix, full, design) {
   n <- ncol(cells)
   w <- friedman.test(cells)$statistic[[1]] / (judges * (n - 1))
   put(paste0(prefix, ".kendall_w"), w)
-  put(paste0(prefix, ".kendall_p"), pf((judges - 1) * w / (1 - w), n - 1, (judges - 1) * (n - 1), lower.tail = FALSE))
+  put(paste0(prefix, ".kendall_p"), concordance_p(w, t(apply(round(cells, 9), 1, rank))))
   long <- data.frame(value = c(cells), judge = factor(c(row(cells))), target = factor(c(col(cells))))
   ms <- anova(lm(value ~ target + judge, long))[["Mean Sq"]]
   limits <- icc_limits(ms[1], ms[2], ms[3], n, judges)
@@ -101,8 +104,11 @@ place_in_flight <- function(prefix, d, design) {
   # A factor with one level says nothing, and lm refuses it.
   others <- Filter(function(name) nlevels(d[[name]]) > 1, c("seat", "sample"))
   with_place <- lm(reformulate(c(others, "place"), "value"), d)
-  test <- anova(lm(reformulate(c("1", others), "value"), d), with_place)[2, ]
-  put_test(prefix, test[["F"]], test[["Df"]], with_place$df.residual)
+  without <- lm(reformulate(c("1", others), "value"), d)
+  df1 <- without$df.residual - with_place$df.residual
+  # Rounding may leave the sum of squares of a place without any effect a hair below 0.
+  gained <- max(0, deviance(without) - deviance(with_place))
+  put_test(prefix, (gained / df1) / (deviance(with_place) / with_place$df.residual), df1, with_place$df.residual)
   effects <- coef(with_place)[grepl("^place", names(coef(with_place)))]
   if (anyNA(effects)) skip(paste0(prefix, ".span"), "places can't be told apart one by one")
   else put(paste0(prefix, ".span"), diff(range(c(0, effects))))

@@ -27,6 +27,5 @@ order_figures <- function(answers, glasses, design) {
   if (!tested) return(invisible())
   statistic <- friedman.test(ranked)$statistic[[1]]
   w <- statistic / (n * (k - 1))
-  p <- pf((n - 1) * w / (1 - w), k - 1, (n - 1) * (k - 1), lower.tail = FALSE)
-  put_all("order", list(statistic = statistic, df = k - 1, p = p, kendall_w = w, hsd = tukey_critical(design$alpha, k, Inf) * sqrt(n * k * (k + 1) / 12)))
+  put_all("order", list(statistic = statistic, df = k - 1, p = concordance_p(w, ranked), kendall_w = w, hsd = tukey_critical(design$alpha, k, Inf) * sqrt(n * k * (k + 1) / 12)))
 }

@@ -27,12 +27,12 @@ function finish(tasting: Tasting): string {
 }
 
 /** Every figure agrees; those of lines with gaps only where R has the packages. */
-function expectAgreement(folder: string, { hasGaps = false, skipped = 0 } = {}): Outcome {
+function expectAgreement(folder: string, { hasGaps = false, mostSkipped = 0 } = {}): Outcome {
   const outcome = reproduce(folder);
   expect(outcome.text).not.toMatch(/DIFFERS|NOT COMPUTED|Error/);
   expect(outcome.status).toBe(0);
-  expect(outcome.counts.agree).toBeGreaterThan(2);
-  if (!hasGaps || hasMixedModels()) expect(outcome.counts.skipped).toBe(skipped);
+  expect(outcome.counts.agree).toBeGreaterThan(1);
+  if (!hasGaps || hasMixedModels()) expect(outcome.counts.skipped).toBeLessThanOrEqual(mostSkipped);
   return outcome;
 }
 
@@ -94,8 +94,12 @@ describe.skipIf(whyNoR)('the bundle’s script of flights', () => {
   });
 
   it('agrees where nothing can be tested', () => {
-    // One person's flights can't tell every place from every sample: the span of places is left out.
-    expectAgreement(finish(tasteFlights({ method: 'profile', lines: [{ name: 'Flat', kind: 'line', score: () => 50 }, twoLines[0]!], seats: 1 })), { skipped: 1 });
+    // By chance of the draw one person's flights may not tell every place from every sample: the span of places is then left out.
+    expectAgreement(finish(tasteFlights({ method: 'profile', lines: [{ name: 'Flat', kind: 'line', score: () => 50 }, twoLines[0]!], seats: 1 })), { mostSkipped: 1 });
+  });
+
+  it('agrees where nobody scored', () => {
+    expectAgreement(finish(tasteFlights({ method: 'profile', lines: [...twoLines, { name: 'Reduction', kind: 'flag', score: () => 0 }], isLeftOut: () => true })));
   });
 
   it('agrees on categories, on liking, and on words rated only where they are there', () => {
@@ -136,8 +140,8 @@ describe.skipIf(whyNoR)('the bundle’s script of sets', () => {
     expectAgreement(finish(tasting));
   });
 
-  it.each([[5, 0], [1, 1], [12, 12]])('agrees on a triangle of %i answers with %i right', (n, correct) => {
-    const tasting = openTasting(scene, { method: 'triangle', barrels: ['1', '2'], seats: n, replicates: 1 });
+  it.each([[5, 0], [1, 1], [12, 12], [0, 0]])('agrees on a triangle of %i answers with %i right', (n, correct) => {
+    const tasting = openTasting(scene, { method: 'triangle', barrels: ['1', '2'], seats: Math.max(1, n), replicates: 1 });
     for (let seat = 1; seat <= n; seat += 1) {
       const samples = tasting.samplesOf(seat, 1);
       const odd = samples.findIndex((sample) => samples.filter((other) => other === sample).length === 1);
