@@ -4,8 +4,11 @@ import { figuresUnder, type Figure } from './figure';
 /** From this many panelists on, the p of W comes from F; below, arrangements are counted, which the script does not do. */
 const PANEL_FOR_F = 8;
 
+/** An F beyond this is over an error that is 0 but for rounding: its digits mean nothing and are not compared. */
+const F_MOST = 1e12;
+
 const testOf = (id: string, what: string, test: TestView | null): Figure[] =>
-  test ? figuresUnder(id, what, { F: test.F, df1: test.df1, df2: test.df2, p: test.p }) : [];
+  test && test.F < F_MOST ? figuresUnder(id, what, { F: test.F, df1: test.df1, df2: test.df2, p: test.p }) : [];
 
 /** Means without a test: of all scores, or of those who scored every glass where a table of them was there. */
 function plainFigures(line: LineView): Figure[] {

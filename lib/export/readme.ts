@@ -42,7 +42,8 @@ apostrophe before them.
 
 Not computed anew: letters beside means (they follow from the p of the pairs), p values
 that the program gets by counting arrangements (Kendall's W below 8 panelists, orders
-below 13 people, words that were ticked), and p of liking that was lost. Tukey's p is
-compared to eight decimals.
+below 13 people, words that were ticked), p of liking that was lost, and an F over an
+error that is 0 but for rounding. What may lie near 0 (Tukey's p and limits, differences)
+is compared to eight decimals, or for lines with gaps to six of a point.
 `;
 }

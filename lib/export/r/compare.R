@@ -15,10 +15,11 @@ reason_to_skip <- function(id) {
   NA
 }
 
-# How far two figures may lie apart: one part in a million. Beside that, p of pairs and what may lie near 0
-# (limits, differences, F) pass when they are closer than 1e-8.
+# How far two figures may lie apart: one part in a million. What may lie near 0 (p of pairs, limits, differences,
+# F) also passes when it is closer than 1e-8, or 1e-6 points where both sides search for the best fit.
 allowed <- function(id, a, b) {
-  floor <- if (grepl("\\.p$", id) && !grepl(".pair.", id, fixed = TRUE)) 0 else 1e-8
+  is_p <- grepl("\\.p$", id)
+  floor <- if (is_p && !grepl(".pair.", id, fixed = TRUE)) 0 else if (!is_p && grepl(".mixed.", id, fixed = TRUE)) 1e-6 else 1e-8
   max(1e-6 * max(abs(a), abs(b)), floor)
 }
 
