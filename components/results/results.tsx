@@ -17,6 +17,7 @@ import { Report } from './report';
 import { RightResult } from './right-result';
 import { Said } from './said';
 import { SamplesTable } from './samples-table';
+import { TakeAway } from './take-away';
 import { TicksResult } from './ticks-result';
 import { Verdict } from './verdict';
 
@@ -94,6 +95,7 @@ export function Results({ results, home, mayCall, maySeeBarrels, calls, cellar }
         </LedgerRow>
       )}
       <LedgerRow question="How was it run?" note={<a href={`/api/v1${home}/sessions/${session.id}/results`} download={`results-${session.id.slice(0, 8)}.json`}>All numbers as a file (JSON)</a>}><Report items={results.report} /></LedgerRow>
+      <LedgerRow question="Take it with you"><TakeAway href={`/api/v1${home}/sessions/${session.id}/results`} /></LedgerRow>
     </LedgerPage>
   );
 }

@@ -9,9 +9,8 @@ import { methodOf } from '../methods';
 import { UNIT_WORDS } from '../methods/types';
 import { findSession, type SessionRow } from '../sessions/find';
 import { showMoment } from '../time';
-import type { ItemFact } from './data';
 import { listEarlyOpenings, listGlasses, listItems, listOperations, listSamples, listSeats, readFrame } from './data';
-import { countAnswers, type CountedAnswers, type GlassFact, type SeatFact } from './evidence';
+import { countAnswers, type GlassFact } from './evidence';
 import { spreadFound } from './found';
 import { reportItems } from './report';
 import { countAll, gatherSaid, viewSeats } from './said';
@@ -94,27 +93,6 @@ function findUnsealed(tx: Tx, access: Access, sessionId: string): SessionRow {
   const session = findSession(tx, access.cellar.id, sessionId);
   if (session.unsealedAt === null) throw new AppError('wrong_state', 'The results can be read after unsealing.');
   return session;
-}
-
-/** What the results rest on, beside them: for files that somebody computes on. */
-export interface Evidence {
-  session: SessionRow;
-  answers: CountedAnswers;
-  glasses: GlassFact[];
-  seats: SeatFact[];
-  items: ItemFact[];
-  results: ResultsView;
-}
-
-/** The counted answers with the results that they give. @throws as `readResults` */
-export function readEvidence(access: Access, sessionId: string): Evidence {
-  return getDb().transaction((tx) => {
-    const session = findUnsealed(tx, access, sessionId);
-    return {
-      session, answers: countAnswers(listOperations(tx, session)), glasses: listGlasses(tx, session), seats: listSeats(tx, session), items: listItems(tx, session),
-      results: assemble(tx, access, session),
-    };
-  });
 }
 
 /** For the page: the results, or what is missing until there are any; a foreign session is "not found". */

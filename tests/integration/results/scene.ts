@@ -1,6 +1,6 @@
 import { and, asc, eq } from 'drizzle-orm';
 import type { Db } from '@/db/client';
-import type { Method, Phase, Role } from '@/db/enums';
+import type { ItemKind, Method, Phase, Role } from '@/db/enums';
 import {
   ballotItems, cellars, descriptors, fills, lots, membershipRoles, memberships, operations, pulls, sampleComponents, samples, seatPeople, seats, sessionPourers, sessions, users, vessels,
 } from '@/db/schema';
@@ -56,7 +56,7 @@ export const makeScene = (barrelNames: readonly string[]): Scene => addCellar(te
 export interface Design {
   method: Method;
   barrels: readonly string[];
-  lines?: readonly { name: string; phase: Phase; kind?: 'line' | 'flag' }[];
+  lines?: readonly { name: string; phase: Phase; kind?: ItemKind }[];
   seats: number;
   replicates: number;
 }
