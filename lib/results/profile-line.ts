@@ -61,7 +61,9 @@ function positionOf(rows: readonly LongScore[], assessors: readonly number[], pr
 /** Panelists' use of the scale over their other disagreement; null where it is not defined. */
 function scalingOf(table: BalancedScores): TestView | null {
   const model = orNull(() => mixedAssessorModel(table));
-  return model && testView(model.scaling, model.disagreement.df);
+  // Disagreement that is only rounding is no measure of anything.
+  if (!model || model.disagreement.ss <= 1e-10 * model.scaling.ss) return null;
+  return testView(model.scaling, model.disagreement.df);
 }
 
 /**
